@@ -1,0 +1,126 @@
+import type { ParameterKind, PlausibleBounds } from "@/modules/methods/model";
+
+export type { ParameterKind, PlausibleBounds };
+
+/** The server's judgement of a reading; codes as stored, words in `STATUS_WORDS`. */
+export const STATUSES = ["within", "watch", "out", "implausible", "unjudged", "none"] as const;
+export type Status = (typeof STATUSES)[number];
+
+/** The words shown for each status. */
+export const STATUS_WORDS: Readonly<Record<Status, string>> = {
+  within: "within",
+  watch: "watch",
+  out: "out of tolerance",
+  implausible: "implausible",
+  unjudged: "cannot be judged",
+  none: "no limits",
+};
+
+/** "" a plain value; "<" below the number; ">" above the number; "ND" not detected, no number known. */
+export const QUALIFIERS = ["", "<", ">", "ND"] as const;
+export type Qualifier = (typeof QUALIFIERS)[number];
+
+/**
+ * A value as the rules see it, in the canonical unit. `value` is null for ND, for "too numerous to count"
+ * (qualifier ">") and for choices and texts. A yes/no answer has 1 or 0; its code stands in `text`.
+ */
+export interface ReadingValue {
+  readonly value: number | null;
+  readonly qualifier: Qualifier;
+  /** The text as typed, or the code of the answer. */
+  readonly text: string;
+}
+
+/** The names of the numeric bounds, in the order in which they must stand. */
+export const ORDERED_BOUNDS = ["toleranceLow", "watchLow", "target", "watchHigh", "toleranceHigh"] as const;
+export type OrderedBound = (typeof ORDERED_BOUNDS)[number];
+
+/** Words for the bounds in sentences. */
+export const BOUND_WORDS: Readonly<Record<OrderedBound | "greatestChange24h", string>> = {
+  toleranceLow: "lower tolerance limit",
+  watchLow: "lower watch limit",
+  target: "target",
+  watchHigh: "upper watch limit",
+  toleranceHigh: "upper tolerance limit",
+  greatestChange24h: "greatest change in any 24 h",
+};
+
+/** Limits at one moment, canonical unit, inclusive; every side may be open (left out). */
+export interface Bounds {
+  readonly target?: number;
+  readonly watchLow?: number;
+  readonly watchHigh?: number;
+  readonly toleranceLow?: number;
+  readonly toleranceHigh?: number;
+  /** Greatest absolute difference to any reading of the same point in the preceding 24.0 elapsed hours. */
+  readonly greatestChange24h?: number;
+}
+
+export interface RampKnot {
+  /** UTC epoch milliseconds. */
+  readonly at: number;
+  readonly bounds: Bounds;
+}
+
+export interface SeasonKnot {
+  /** "MM-DD" in the facility's calendar. */
+  readonly monthDay: string;
+  readonly bounds: Bounds;
+}
+
+/** How limits run through time: constant, linear between moments, or linear between days of every year. */
+export type LimitShape =
+  | { readonly kind: "constant"; readonly bounds: Bounds }
+  | { readonly kind: "ramp"; readonly knots: readonly RampKnot[] }
+  | { readonly kind: "season"; readonly knots: readonly SeasonKnot[] };
+
+/** One approved version of the limits of a point and parameter. */
+export interface LimitVersion {
+  readonly id: number;
+  readonly version: number;
+  readonly effectiveFromAt: number;
+  /** The moment from which it no longer holds; null while open. */
+  readonly effectiveToAt: number | null;
+  readonly shape: LimitShape;
+  readonly suspended: { readonly reason: string } | null;
+}
+
+/** The limits that hold at one moment, or why there are none. */
+export type LimitsInForce =
+  | { readonly state: "in-force"; readonly versionId: number; readonly version: number; readonly bounds: Bounds }
+  | { readonly state: "suspended"; readonly versionId: number; readonly version: number; readonly reason: string }
+  | { readonly state: "none" };
+
+/** On which side a value is off. "change": by its change in 24 h only. */
+export type Side = "low" | "high" | "change";
+
+/** Why a status was given: codes with the numbers they rest on, in the canonical unit. */
+export type Reason =
+  | { readonly code: "below-plausible" | "above-plausible"; readonly value: number; readonly limit: number }
+  | { readonly code: "below-tolerance" | "above-tolerance"; readonly value: number; readonly limit: number }
+  | { readonly code: "below-watch" | "above-watch"; readonly value: number; readonly limit: number }
+  | {
+      readonly code: "change-too-great";
+      readonly change: number;
+      readonly limit: number;
+      readonly againstValue: number;
+      readonly againstAt: number;
+    }
+  | { readonly code: "change-not-judged" }
+  | { readonly code: "bound-does-not-decide"; readonly bound: OrderedBound; readonly limit: number }
+  | { readonly code: "no-number" }
+  | { readonly code: "answer"; readonly answer: string }
+  | { readonly code: "inside-limits" }
+  | { readonly code: "no-limits" }
+  | { readonly code: "limits-suspended"; readonly reason: string };
+
+/** A status with its grounds and one sentence for people. */
+export interface StatusVerdict {
+  readonly status: Status;
+  readonly side: Side | null;
+  readonly reasons: readonly Reason[];
+  readonly sentence: string;
+}
+
+/** The version of the judging rules, stored with every judgement; raised whenever a rule changes an answer. */
+export const STATUS_RULE_VERSION = 1;

@@ -1,0 +1,57 @@
+/** What a parameter's value is made of. */
+export const PARAMETER_KINDS = ["number", "count", "yes-no", "choice", "text"] as const;
+export type ParameterKind = (typeof PARAMETER_KINDS)[number];
+
+/** The groups in which parameters are listed on screen, in this order. */
+export const PARAMETER_GROUPS = [
+  "physics",
+  "gases",
+  "ph-and-alkalinity",
+  "nutrients",
+  "ions-and-metals",
+  "disinfection",
+  "microbiology",
+  "source-water",
+  "equipment",
+  "observation",
+] as const;
+export type ParameterGroup = (typeof PARAMETER_GROUPS)[number];
+
+/** What an answer says by itself about the water or the machine; "none" is a remark that is not judged. */
+export const ANSWER_MEANINGS = ["within", "watch", "out", "none"] as const;
+export type AnswerMeaning = (typeof ANSWER_MEANINGS)[number];
+
+/** One answer of a yes/no or choice parameter. Yes/no parameters have exactly the codes "yes" and "no". */
+export interface ParameterChoice {
+  readonly code: string;
+  readonly label: string;
+  readonly means: AnswerMeaning;
+}
+
+/** The values a parameter can have at all; either side may be open (null). Canonical unit, inclusive. */
+export interface PlausibleBounds {
+  readonly low: number | null;
+  readonly high: number | null;
+}
+
+/**
+ * What is measured or checked: one entry of the catalogue, and the shape in which a parameter is handed to
+ * forms and rules. Numbers are in the canonical unit.
+ */
+export interface ParameterDefinition {
+  /** Short code people type and files carry, such as `ph_nbs`. */
+  readonly code: string;
+  readonly name: string;
+  readonly kind: ParameterKind;
+  /** Canonical unit, a code of `lib/units`; null for answers, texts and bare numbers. */
+  readonly unit: string | null;
+  /** Units in which a value may be typed; the canonical one is always among them when there is one. */
+  readonly acceptedUnits: readonly string[];
+  /** Digits shown after the point, in the canonical unit. */
+  readonly decimals: number;
+  readonly plausible: PlausibleBounds;
+  readonly choices: readonly ParameterChoice[];
+  readonly group: ParameterGroup;
+  readonly mayBeNegative: boolean;
+  readonly note: string;
+}
