@@ -1,0 +1,50 @@
+import type { Measured } from "../model";
+
+/** Two results further apart than this many standard uncertainties of their difference are pointed out. */
+export const DISAGREEMENT_BOUND = 2;
+
+export type Disagreement = {
+  /** |V₁ − V₂| / √(u₁² + u₂²); Infinity when both claim to be exact and differ. */
+  ratio: number;
+  differenceL: number;
+  disagrees: boolean;
+  /** What a person should read; null when the two agree. */
+  sentence: string | null;
+};
+
+/**
+ * Do two determinations of the same volume contradict each other? Not for volumes of different fill levels.
+ *
+ * Formula: ratio = |V₁ − V₂| / √(u₁² + u₂²); they disagree when it is greater than 2 (exactly 2 still agrees).
+ * Units: litres. Domain: finite volumes, uncertainties ≥ 0; RangeError outside it.
+ * Source: the zeta score of ISO 13528 with its warning bound of 2 (the standard's clause on zeta scores).
+ * Checked: tests/published/volume-disagreement.test.ts.
+ *
+ * @example disagreement({ value: 1000, standardUncertainty: 3 }, { value: 1010, standardUncertainty: 4 }).ratio // 2
+ */
+export function disagreement(first: Measured, second: Measured): Disagreement {
+  for (const { value, standardUncertainty } of [first, second]) {
+    if (!Number.isFinite(value)) throw new RangeError("A volume must be a finite number of litres.");
+    if (!(Number.isFinite(standardUncertainty) && standardUncertainty >= 0)) {
+      throw new RangeError("A standard uncertainty must be a number of 0 or more.");
+    }
+  }
+  const differenceL = Math.abs(first.value - second.value);
+  const togetherL = Math.hypot(first.standardUncertainty, second.standardUncertainty);
+  const ratio = differenceL === 0 ? 0 : differenceL / togetherL;
+  const disagrees = ratio > DISAGREEMENT_BOUND;
+  return {
+    ratio,
+    differenceL,
+    disagrees,
+    sentence: disagrees ? sentenceOf(differenceL, togetherL, ratio) : null,
+  };
+}
+
+function sentenceOf(differenceL: number, togetherL: number, ratio: number): string {
+  const litres = (value: number) => `${value.toLocaleString("en-GB", { maximumSignificantDigits: 3 })} L`;
+  const times = Number.isFinite(ratio)
+    ? `${ratio.toLocaleString("en-GB", { maximumSignificantDigits: 2 })} times the ${litres(togetherL)} that their uncertainties allow one standard deviation`
+    : "although both are given as exact";
+  return `The two volumes differ by ${litres(differenceL)}, ${times}: one of them, or its uncertainty, is wrong. Measure again before relying on either.`;
+}
