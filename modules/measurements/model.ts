@@ -87,8 +87,18 @@ export interface LimitVersion {
 
 /** The limits that hold at one moment, or why there are none. */
 export type LimitsInForce =
-  | { readonly state: "in-force"; readonly versionId: number; readonly version: number; readonly bounds: Bounds }
-  | { readonly state: "suspended"; readonly versionId: number; readonly version: number; readonly reason: string }
+  | {
+      readonly state: "in-force";
+      readonly versionId: number;
+      readonly version: number;
+      readonly bounds: Bounds;
+    }
+  | {
+      readonly state: "suspended";
+      readonly versionId: number;
+      readonly version: number;
+      readonly reason: string;
+    }
   | { readonly state: "none" };
 
 /** On which side a value is off. "change": by its change in 24 h only. */
