@@ -1,0 +1,11 @@
+export { abilityFor, may, mayInArea, visibleAreas, type WaterAbility } from "./ability";
+export {
+  type Actor,
+  type Permission,
+  ROLE_LABELS,
+  ROLES,
+  type Role,
+  type Scope,
+  SYSTEM_ACTOR,
+} from "./model";
+export { definePermissions } from "./permissions";

@@ -1,0 +1,11 @@
+import { definePermissions } from "@/modules/access";
+
+export const auditMay = definePermissions("audit", {
+  readHistory: {
+    says: "read the whole history",
+    roles: { lead: "everywhere", auditor: "everywhere", admin: "everywhere", veterinarian: "everywhere" },
+  },
+  readRecord: { says: "read the history of one record", roles: "everyone" },
+  readHealth: { says: "see the health of the installation", roles: { admin: "everywhere", auditor: "everywhere" } },
+  makeCheckpoint: { says: "send checkpoints of the history", roles: "system" },
+});

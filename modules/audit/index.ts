@@ -1,0 +1,14 @@
+import "server-only";
+
+export { auditMay } from "./abilities";
+export { capturedTables, installCapture, schemaHash } from "./capture";
+export { type Command, type CommandContext, type CommandOutcome, defineCommand } from "./define-command";
+export { ask, defineQuery, type Query, type QueryContext } from "./define-query";
+export { auditEvents } from "./events";
+export { type Reaction, type ReactionTable, useReactions } from "./jobs/queue";
+export { defineTask, JobRunner, type Task, type WorkTable } from "./jobs/runner";
+export { migrateDatabase, sealOutsideCommand } from "./migrate";
+export { parseInput } from "./parse-input";
+export { type Answer, runCommand, type RunOptions } from "./run-command";
+export { upkeep } from "./upkeep";
+export { type Finding, type Verification, verifyHistory } from "./verify";
