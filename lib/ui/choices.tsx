@@ -26,7 +26,8 @@ export interface RadioOption {
   disabled?: boolean;
 }
 
-export interface RadioButtonsProps extends Omit<ComponentProps<"input">, "type" | "value" | "defaultValue" | "onChange"> {
+export interface RadioButtonsProps
+  extends Omit<ComponentProps<"input">, "type" | "value" | "defaultValue" | "onChange"> {
   name: string;
   options: readonly RadioOption[];
   /** Controlled value; leave out with react-hook-form's `register`. */
@@ -38,10 +39,22 @@ export interface RadioButtonsProps extends Omit<ComponentProps<"input">, "type" 
 }
 
 /** One of a few, as buttons big enough for a wet thumb. Arrow keys move between them. Use inside `<Field group>`. */
-export function RadioButtons({ options, value, defaultValue, label, className = "", ...rest }: RadioButtonsProps) {
+export function RadioButtons({
+  options,
+  value,
+  defaultValue,
+  label,
+  className = "",
+  ...rest
+}: RadioButtonsProps) {
   const { "aria-invalid": invalid } = useFieldAttributes({});
   return (
-    <div role="radiogroup" aria-label={label} aria-invalid={invalid} className={`flex flex-wrap gap-2.5 ${className}`}>
+    <div
+      role="radiogroup"
+      aria-label={label}
+      aria-invalid={invalid}
+      className={`flex flex-wrap gap-2.5 ${className}`}
+    >
       {options.map((option) => (
         <label key={option.value} className="pick">
           <input

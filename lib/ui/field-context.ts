@@ -12,7 +12,10 @@ export interface FieldContextValue {
 export const FieldContext = createContext<FieldContextValue | null>(null);
 
 /** The attributes that tie a control to its label, hint and error; a control outside a Field keeps its own. */
-export function useFieldAttributes(own: { id?: string | undefined; "aria-describedby"?: string | undefined }): {
+export function useFieldAttributes(own: {
+  id?: string | undefined;
+  "aria-describedby"?: string | undefined;
+}): {
   id: string | undefined;
   "aria-describedby": string | undefined;
   "aria-invalid": true | undefined;

@@ -1,6 +1,7 @@
 "use client";
 import { type ReactNode, useId, useMemo } from "react";
 import { FieldContext } from "./field-context";
+import { fieldId } from "./field-id";
 
 export interface FieldProps {
   label: ReactNode;
@@ -16,18 +17,23 @@ export interface FieldProps {
   children: ReactNode;
 }
 
-/** The id of the control of a named field (dots and brackets become dashes). */
-export function fieldId(name: string): string {
-  return `field-${name.replace(/[^A-Za-z0-9_-]+/g, "-")}`;
-}
-
 /** A label, its control, a hint and the error, tied together for eyes and for assistive technology. */
-export function Field({ label, name, hint, error, required = false, group = false, className = "", children }: FieldProps) {
+export function Field({
+  label,
+  name,
+  hint,
+  error,
+  required = false,
+  group = false,
+  className = "",
+  children,
+}: FieldProps) {
   const auto = useId();
   const id = name ? fieldId(name) : `field${auto}`;
   const hasHint = hint !== undefined && hint !== null && hint !== false;
   const hasError = error !== undefined && error !== null && error !== false && error !== "";
-  const describedBy = [hasHint && `${id}-hint`, hasError && `${id}-error`].filter(Boolean).join(" ") || undefined;
+  const describedBy =
+    [hasHint && `${id}-hint`, hasError && `${id}-error`].filter(Boolean).join(" ") || undefined;
   const context = useMemo(
     () => ({ id, describedBy, invalid: hasError, required }),
     [id, describedBy, hasError, required],

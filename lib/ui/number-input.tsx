@@ -14,7 +14,15 @@ export interface NumberInputProps extends Omit<ComponentProps<"input">, "type" |
 }
 
 /** A number as typed: text with a decimal keypad, so that nothing typed is ever lost or silently changed. */
-export function NumberInput({ unit, signed = false, size = "normal", status, className = "", ref, ...rest }: NumberInputProps) {
+export function NumberInput({
+  unit,
+  signed = false,
+  size = "normal",
+  status,
+  className = "",
+  ref,
+  ...rest
+}: NumberInputProps) {
   const input = useRef<HTMLInputElement | null>(null);
   const setRef = useCallback(
     (element: HTMLInputElement | null) => {

@@ -31,7 +31,7 @@ export function PageHead({ title, name, facts, figures, waiting, actions }: Page
       {figures}
       {actions !== undefined && <div className="flex flex-wrap gap-2.5">{actions}</div>}
       {waiting !== undefined && (
-        <div className="max-w-xs grow border-l-4 border-water bg-wash px-4 py-2.5 text-[0.9375rem] sm:grow-0">
+        <div className="grow border-l-4 border-water bg-wash px-4 py-2.5 text-[0.9375rem] sm:max-w-xs sm:grow-0">
           <b className="block font-semibold">Waiting for you</b>
           {waiting}
         </div>
@@ -56,7 +56,9 @@ export function Facts({ facts }: { facts: readonly Fact[] }) {
           <dt className="text-ink-3">{fact.label}</dt>
           <dd className="font-semibold">
             {fact.value}
-            {fact.note !== undefined && <span className="ml-2 text-sm font-normal text-ink-3">{fact.note}</span>}
+            {fact.note !== undefined && (
+              <span className="ml-2 text-sm font-normal text-ink-3">{fact.note}</span>
+            )}
           </dd>
         </div>
       ))}

@@ -28,9 +28,15 @@ export function Panel({
   const Heading = headingLevel === 2 ? "h2" : "h3";
   const frame = look === "sheet" ? "panel border border-rule bg-sheet px-4 py-4 sm:px-5" : "panel";
   return (
-    <section id={id} aria-labelledby={id && title ? `${id}-title` : undefined} className={`${frame} ${className}`}>
+    <section
+      id={id}
+      aria-labelledby={id && title ? `${id}-title` : undefined}
+      className={`${frame} ${className}`}
+    >
       {title !== undefined && (
-        <div className={`flex flex-wrap items-baseline gap-x-3 gap-y-1 ${look === "open" ? "border-b border-rule pb-2" : ""} mb-3`}>
+        <div
+          className={`flex flex-wrap items-baseline gap-x-3 gap-y-1 ${look === "open" ? "border-b border-rule pb-2" : ""} mb-3`}
+        >
           <Heading id={id ? `${id}-title` : undefined}>{title}</Heading>
           {aside !== undefined && <span className="text-sm text-ink-3">{aside}</span>}
           {actions !== undefined && <span className="ml-auto flex flex-wrap gap-2">{actions}</span>}

@@ -67,7 +67,12 @@ function StaffList({ items, here, wetFrom, foot = false, rows, onFollow }: Staff
         const wet = wetFrom === -2 || (wetFrom >= 0 && index > wetFrom);
         return (
           <li key={item.href} data-wet={wet} data-here={isHere}>
-            <Link href={item.href} className="staff-link" aria-current={isHere ? "page" : undefined} onClick={onFollow}>
+            <Link
+              href={item.href}
+              className="staff-link"
+              aria-current={isHere ? "page" : undefined}
+              onClick={onFollow}
+            >
               {item.label}
             </Link>
             {isHere && <Meniscus />}
@@ -117,8 +122,16 @@ function StaffBar({ items, footItems, here, mark }: StaffBarProps) {
               </AriaButton>
             </div>
             <nav aria-label="Main">
-              <StaffList items={items} here={here} wetFrom={-1} rows={Math.ceil(items.length / 2)} onFollow={close} />
-              {footItems.length > 0 && <StaffList items={footItems} here={here} wetFrom={-1} foot rows={1} onFollow={close} />}
+              <StaffList
+                items={items}
+                here={here}
+                wetFrom={-1}
+                rows={Math.ceil(items.length / 2)}
+                onFollow={close}
+              />
+              {footItems.length > 0 && (
+                <StaffList items={footItems} here={here} wetFrom={-1} foot rows={1} onFollow={close} />
+              )}
             </nav>
           </Dialog>
         </Modal>

@@ -24,6 +24,11 @@ export type DateInputProps = Omit<ComponentProps<"input">, "type"> & {
 /** A calendar day, a time of day, or both, in the facility's zone; the browser's own control. */
 export function DateInput({ kind = "date", className = "", ...rest }: DateInputProps) {
   return (
-    <input {...rest} {...useFieldAttributes(rest)} type={kind} className={`control num max-w-[15rem] ${className}`} />
+    <input
+      {...rest}
+      {...useFieldAttributes(rest)}
+      type={kind}
+      className={`control num max-w-[15rem] ${className}`}
+    />
   );
 }

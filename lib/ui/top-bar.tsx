@@ -21,7 +21,14 @@ export interface TopBarProps {
 }
 
 /** The line above every page: where you are, which day counts, what time it is there, and who you are. */
-export function TopBar({ crumbs = [], day, dayLabel = "Operational day", clock, person, children }: TopBarProps) {
+export function TopBar({
+  crumbs = [],
+  day,
+  dayLabel = "Operational day",
+  clock,
+  person,
+  children,
+}: TopBarProps) {
   return (
     <header className="topbar flex min-h-[58px] flex-wrap items-center gap-x-6 gap-y-1 border-b border-rule py-2 text-[0.9375rem] text-ink-2">
       {crumbs.length > 0 && <Crumbs crumbs={crumbs} />}
@@ -61,7 +68,10 @@ function Crumbs({ crumbs }: { crumbs: readonly Crumb[] }) {
                 {crumb.label}
               </span>
             ) : (
-              <Link href={crumb.href} className="inline-flex min-h-6 items-center hover:underline underline-offset-4">
+              <Link
+                href={crumb.href}
+                className="inline-flex min-h-6 items-center hover:underline underline-offset-4"
+              >
                 {crumb.label}
               </Link>
             )}
