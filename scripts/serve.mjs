@@ -15,7 +15,10 @@ export function portIsFree(port) {
   });
 }
 
-/** A port of 127.0.0.1 that is free now. */
+/**
+ * A port of 127.0.0.1 that is free now.
+ * @returns {Promise<number>}
+ */
 export function freePort() {
   return new Promise((resolve, reject) => {
     const probe = createServer();
@@ -27,7 +30,11 @@ export function freePort() {
   });
 }
 
-/** Starts the built server as one process, known by its pid. */
+/**
+ * Starts the built server as one process, known by its pid.
+ * @param {{ port: number, host?: string, env: Record<string, string | undefined>, stdio?: "inherit" | number }} how
+ * @returns {import("node:child_process").ChildProcess}
+ */
 export function spawnServer({ port, host, env, stdio = "inherit" }) {
   const args = ["node_modules/next/dist/bin/next", "start", "-p", String(port)];
   if (host !== undefined) args.push("-H", host);
@@ -40,6 +47,8 @@ export function spawnServer({ port, host, env, stdio = "inherit" }) {
 
 /**
  * Waits until the server answers.
+ * @param {import("node:child_process").ChildProcess} child
+ * @param {string} url
  * @throws Error when it ends first, or is silent for a minute
  */
 export async function waitUntilReady(child, url) {
@@ -58,7 +67,11 @@ export async function waitUntilReady(child, url) {
   throw new Error(`the server did not answer at ${url} within ${READY_MS / 1000} s`);
 }
 
-/** Asks the process to end, and ends it when it does not within 15 s. */
+/**
+ * Asks the process to end, and ends it when it does not within 15 s.
+ * @param {import("node:child_process").ChildProcess} child
+ * @returns {Promise<void>}
+ */
 export async function stopServer(child) {
   if (child.exitCode !== null || child.signalCode !== null) return;
   const ended = new Promise((resolve) => child.once("exit", resolve));
