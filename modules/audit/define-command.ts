@@ -17,7 +17,7 @@ export type CommandContext = {
 };
 
 /** Something that can be carried out later by name: a command by the system, or a task. */
-export type QueuedWork<I = unknown> = { readonly verb: string; readonly takes?: (input: I) => void };
+export type QueuedWork<I = unknown> = { readonly verb: string; takes?(input: I): void };
 
 export type CommandOutcome<R> = { result: R; event: HistoryEvent };
 
@@ -27,6 +27,8 @@ type Definition<S extends z.ZodType, R, P extends Permission> = {
   permission: P;
   /** Strict schema of what people, files and machines send. */
   input: S;
+  /** A signature: whoever acts has just proven their password again (the caller says so in the options). */
+  signed?: boolean;
   /** Load and check state inside the transaction, decide by rules, write. Synchronous; throws `Problem` to refuse. */
   run(ctx: CommandContext, input: z.output<S>): CommandOutcome<R>;
 } & (P extends Permission<true>
@@ -40,6 +42,7 @@ export type Command<S extends z.ZodType = z.ZodType, R = unknown> = {
   readonly verb: string;
   readonly permission: Permission;
   readonly input: S;
+  readonly signed?: boolean;
   run(ctx: CommandContext, input: z.output<S>): CommandOutcome<R>;
   areas?(ctx: Pick<CommandContext, "db" | "actor" | "at">, input: z.output<S>): Iterable<number>;
 };

@@ -18,6 +18,8 @@ export type RunOptions = {
   requestId?: string | null;
   /** What a client creates carries its UUID: the same key twice is carried out once. */
   idempotencyKey?: string | null;
+  /** The actor has just proven their password again; a command that is a signature asks for it. */
+  passwordConfirmed?: boolean;
 };
 
 export type Answer<R> = { result: R; entryId: number; replayed: boolean };
@@ -85,6 +87,9 @@ export function runCommand<S extends z.ZodType, R>(
 ): Answer<R> {
   const input = parseInput(command.input, rawInput);
   mustBeAllowed(actor, command as unknown as Command);
+  if (command.signed && !options.passwordConfirmed) {
+    throw new Problem("wrong-password", "Signing asks for your password; it is not right.");
+  }
   const { sqlite } = db.writer;
   invariant(db.writer.openEntry === null, "commands do not nest");
   sqlite.exec("begin immediate");

@@ -1,4 +1,4 @@
-import { z } from "zod";
+import type { z } from "zod";
 import type { Database } from "@/db/database";
 import { type Clock, MINUTE_MS, SECOND_MS } from "@/lib/clock";
 import { log } from "@/lib/log";
@@ -7,20 +7,32 @@ import type { Command, QueuedWork } from "../define-command";
 import { runCommand } from "../run-command";
 import { upkeep } from "../upkeep";
 
+type TaskDeps = { db: Database; clock: Clock };
+
+type TaskDefinition<S extends z.ZodType> = {
+  verb: string;
+  /** Tasks of one lane go one after the other; lanes do not wait for each other. */
+  lane: "mail" | "files";
+  input: S;
+  perform(deps: TaskDeps, input: z.output<S>): Promise<void>;
+};
+
 /** Work that waits for something outside the database (a child process, a mail server) between its commands. */
 export type Task<I = unknown> = QueuedWork<I> & {
-  readonly input: z.ZodType<I>;
-  /** Tasks of one lane go one after the other; lanes do not wait for each other. */
   readonly lane: "mail" | "files";
-  perform(deps: { db: Database; clock: Clock }, input: I): Promise<void>;
+  perform(deps: TaskDeps, raw: unknown): Promise<void>;
 };
 
 /** A task by name, for `enqueue` and for the table of work. */
-export function defineTask<I>(task: Omit<Task<I>, "takes">): Task<I> {
-  return task;
+export function defineTask<S extends z.ZodType>(task: TaskDefinition<S>): Task<z.output<S>> {
+  return {
+    verb: task.verb,
+    lane: task.lane,
+    perform: (deps, raw) => task.perform(deps, task.input.parse(raw)),
+  };
 }
 
-export type WorkTable = readonly (Command<z.ZodType, unknown> | Task<never>)[];
+export type WorkTable = readonly (Command | Task)[];
 
 type JobRow = { id: number; kind: string; input: string; attempts: number };
 
@@ -35,7 +47,7 @@ const DUE =
 
 /** Carries out jobs one after the other, at least once each; what fails is tried again later, then left marked as failed. */
 export class JobRunner {
-  readonly #work: Map<string, Command | Task<never>>;
+  readonly #work: Map<string, Command | Task>;
   readonly #lanes: string[];
   #stopped = false;
   #loops: Promise<void>[] = [];
@@ -45,7 +57,7 @@ export class JobRunner {
     private readonly clock: Clock,
     work: WorkTable,
   ) {
-    this.#work = new Map(work.map((item) => [item.verb, item as Command | Task<never>]));
+    this.#work = new Map(work.map((item) => [item.verb, item]));
     const byLane: Record<string, string[]> = {};
     for (const item of work) {
       const lane = "perform" in item ? item.lane : "commands";
@@ -102,10 +114,10 @@ export class JobRunner {
     if (!work) throw new Error(`no work is known by the name ${job.kind}`);
     const input: unknown = JSON.parse(job.input);
     if ("perform" in work) {
-      await work.perform({ db: this.db, clock: this.clock }, work.input.parse(input) as never);
+      await work.perform({ db: this.db, clock: this.clock }, input);
       return;
     }
-    runCommand(this.db, SYSTEM_ACTOR, work as Command, input, { clock: this.clock, requestId: `job:${job.id}` });
+    runCommand(this.db, SYSTEM_ACTOR, work, input, { clock: this.clock, requestId: `job:${job.id}` });
   }
 
   #fail(job: JobRow, cause: unknown): void {

@@ -1,0 +1,78 @@
+import "server-only";
+import { decode } from "next-auth/jwt";
+import { cookies } from "next/headers";
+import { forbidden, notFound, redirect } from "next/navigation";
+import { cache } from "react";
+import type { z } from "zod";
+import { database } from "@/db/database";
+import { systemClock } from "@/lib/clock";
+import { settings } from "@/lib/env";
+import { log } from "@/lib/log";
+import { Problem } from "@/lib/problem";
+import type { Actor } from "@/modules/access";
+import { ask, type Query, upkeep } from "@/modules/audit";
+import { findSession, touchSession } from "@/modules/identity";
+import { SESSION_COOKIE, SESSION_COOKIE_SECURE } from "./cookies";
+import { prepareRuntime } from "./runtime";
+
+async function sessionSecret(): Promise<string | null> {
+  const jar = await cookies();
+  const name = settings().secureCookies ? SESSION_COOKIE_SECURE : SESSION_COOKIE;
+  const token = jar.get(name)?.value;
+  if (!token) return null;
+  const claims = await decode({ token, secret: settings().NEXTAUTH_SECRET ?? "" });
+  return typeof claims?.sid === "string" ? claims.sid : null;
+}
+
+/**
+ * Who asks, looked up in the database on every request, so that a suspension or a role that ended works at once.
+ * Any fault on the way is a refusal.
+ * @throws Problem `not-signed-in` or `session-ended`
+ */
+export async function requestActor(): Promise<Actor> {
+  let secret: string | null = null;
+  try {
+    secret = await sessionSecret();
+  } catch (cause) {
+    log().warn({ err: cause }, "a session cookie could not be read");
+  }
+  if (secret === null) throw new Problem("not-signed-in", "Sign in and send it again; nothing was taken.");
+  const at = systemClock.now();
+  const found = findSession(database().reader.orm, secret, at);
+  if (found.kind !== "actor") {
+    throw new Problem("session-ended", "Sign in again and send it once more; nothing was taken.");
+  }
+  const { actor, seenAt } = found;
+  if (actor.sessionId) {
+    const sessionId = actor.sessionId;
+    if (at - seenAt > 60_000) upkeep(database(), (orm) => touchSession(orm, sessionId, seenAt, at));
+  }
+  return actor;
+}
+
+/** The actor of a page, once a request; people who are not signed in are sent to the sign-in page. */
+export const pageActor = cache(async (): Promise<Actor> => {
+  prepareRuntime();
+  try {
+    return await requestActor();
+  } catch (cause) {
+    if (cause instanceof Problem && cause.status === 401) {
+      redirect(cause.code === "session-ended" ? "/sign-in?ended=1" : "/sign-in");
+    }
+    throw cause;
+  }
+});
+
+/** Asks a question for a page: not allowed shows the page that says so, not found the one that says that. */
+export async function askPage<S extends z.ZodType, R>(what: Query<S, R>, input: z.input<S>): Promise<R> {
+  const actor = await pageActor();
+  try {
+    return ask({ db: database().reader.orm, actor, at: systemClock.now() }, what, input);
+  } catch (cause) {
+    if (!(cause instanceof Problem)) throw cause;
+    log().info({ person: actor.personId, query: what.name, code: cause.code }, "page refused");
+    if (cause.status === 403) forbidden();
+    if (cause.status === 404 || cause.status === 422) notFound();
+    throw cause;
+  }
+}

@@ -1,0 +1,6 @@
+import "server-only";
+
+export { notificationsMay } from "./abilities";
+export { deliverMail } from "./deliver-mail";
+export { listMail } from "./queries/list-mail";
+export { queueMail } from "./queue-mail";
