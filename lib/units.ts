@@ -21,7 +21,7 @@ export {
  * is added for physical units the table does not list ("ft^3/hour", "kg/m^3"). The instance knows only units: no
  * parser, no functions, and it is not exported, so that nobody can import into it or create units in it.
  */
-const onlyUnits = create({ unitDependencies }, {});
+const onlyUnits = create({ ...unitDependencies }, {});
 
 const LONGEST_EXPRESSION = 40;
 const PLAIN_EXPRESSION = /^[A-Za-zµ]+(\^-?[1-3])?([*/ ][A-Za-zµ]+(\^-?[1-3])?)*$/;
