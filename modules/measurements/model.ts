@@ -134,3 +134,25 @@ export interface StatusVerdict {
 
 /** The version of the judging rules, stored with every judgement; raised whenever a rule changes an answer. */
 export const STATUS_RULE_VERSION = 1;
+
+export const SIDES = ["low", "high", "change"] as const satisfies readonly Side[];
+
+/** By which way a reading came. */
+export const READING_SOURCES = ["entry", "grid", "import", "round", "derived"] as const;
+export type ReadingSource = (typeof READING_SOURCES)[number];
+
+/** Why a reading was judged, or judged again. */
+export const JUDGEMENT_CAUSES = [
+  "entered",
+  "late-reading",
+  "correction",
+  "new-limits",
+  "delivery",
+  "withdrawal",
+  "voided",
+] as const;
+export type JudgementCause = (typeof JUDGEMENT_CAUSES)[number];
+
+/** The way of proposed limits. */
+export const LIMIT_STATES = ["proposed", "approved", "declined"] as const;
+export type LimitState = (typeof LIMIT_STATES)[number];
