@@ -145,6 +145,193 @@ CREATE TABLE `identity_throttle` (
 	`failures` integer NOT NULL
 );
 --> statement-breakpoint
+CREATE TABLE `measurements_delivery` (
+	`id` integer PRIMARY KEY NOT NULL,
+	`source` text NOT NULL,
+	`source_ref` text NOT NULL,
+	`opened_at` integer NOT NULL,
+	`published_at` integer,
+	`withdrawn_at` integer,
+	`withdrawn_by` integer,
+	`withdrawn_reason` text
+);
+--> statement-breakpoint
+CREATE TABLE `measurements_explanation` (
+	`id` integer PRIMARY KEY NOT NULL,
+	`reading_id` integer NOT NULL,
+	`text` text NOT NULL,
+	`explained_by` integer NOT NULL,
+	`explained_at` integer NOT NULL,
+	FOREIGN KEY (`reading_id`) REFERENCES `measurements_reading`(`id`) ON UPDATE no action ON DELETE no action
+);
+--> statement-breakpoint
+CREATE INDEX `measurements_explanation_reading` ON `measurements_explanation` (`reading_id`);--> statement-breakpoint
+CREATE TABLE `measurements_judgement` (
+	`id` integer PRIMARY KEY NOT NULL,
+	`reading_id` integer NOT NULL,
+	`status` text NOT NULL,
+	`side` text,
+	`sentence` text NOT NULL,
+	`reasons` text NOT NULL,
+	`limit_version_id` integer,
+	`rule_version` integer NOT NULL,
+	`cause` text NOT NULL,
+	`judged_at` integer NOT NULL,
+	FOREIGN KEY (`reading_id`) REFERENCES `measurements_reading`(`id`) ON UPDATE no action ON DELETE no action
+);
+--> statement-breakpoint
+CREATE INDEX `measurements_judgement_latest` ON `measurements_judgement` (`reading_id`,`id`);--> statement-breakpoint
+CREATE TABLE `measurements_limit_template` (
+	`id` integer PRIMARY KEY NOT NULL,
+	`name` text NOT NULL,
+	`note` text DEFAULT '' NOT NULL,
+	`rows` text NOT NULL,
+	`changed_by` integer NOT NULL,
+	`changed_at` integer NOT NULL,
+	`retired_at` integer
+);
+--> statement-breakpoint
+CREATE UNIQUE INDEX `measurements_limit_template_name` ON `measurements_limit_template` (lower("name"));--> statement-breakpoint
+CREATE TABLE `measurements_limit_version` (
+	`id` integer PRIMARY KEY NOT NULL,
+	`workbook_id` integer NOT NULL,
+	`point_id` integer NOT NULL,
+	`parameter_id` integer NOT NULL,
+	`version` integer NOT NULL,
+	`state` text NOT NULL,
+	`effective_from_at` integer NOT NULL,
+	`effective_to_at` integer,
+	`shape` text NOT NULL,
+	`suspended_reason` text,
+	FOREIGN KEY (`workbook_id`) REFERENCES `measurements_limit_workbook`(`id`) ON UPDATE no action ON DELETE no action
+);
+--> statement-breakpoint
+CREATE UNIQUE INDEX `measurements_limit_version_number` ON `measurements_limit_version` (`point_id`,`parameter_id`,`version`);--> statement-breakpoint
+CREATE INDEX `measurements_limit_version_workbook` ON `measurements_limit_version` (`workbook_id`);--> statement-breakpoint
+CREATE TABLE `measurements_limit_workbook` (
+	`id` integer PRIMARY KEY NOT NULL,
+	`title` text NOT NULL,
+	`reason` text NOT NULL,
+	`state` text NOT NULL,
+	`proposed_by` integer NOT NULL,
+	`proposed_at` integer NOT NULL,
+	`decided_by` integer,
+	`decided_at` integer,
+	`decision_comment` text
+);
+--> statement-breakpoint
+CREATE TABLE `measurements_reading` (
+	`id` integer PRIMARY KEY NOT NULL,
+	`uuid` text NOT NULL,
+	`point_id` integer NOT NULL,
+	`parameter_id` integer NOT NULL,
+	`typed_text` text NOT NULL,
+	`typed_unit` text,
+	`value` real,
+	`qualifier` text NOT NULL,
+	`answer` text,
+	`taken_at` integer NOT NULL,
+	`entered_at` integer NOT NULL,
+	`taken_by` integer NOT NULL,
+	`entered_by` integer NOT NULL,
+	`method_id` integer,
+	`instrument_id` integer,
+	`source` text NOT NULL,
+	`source_ref` text,
+	`delivery_id` integer,
+	`note` text,
+	`supersedes_id` integer,
+	`correction_reason` text,
+	`confirmed_by` integer,
+	`confirmed_at` integer,
+	`voided_by` integer,
+	`voided_at` integer,
+	`void_reason` text,
+	FOREIGN KEY (`delivery_id`) REFERENCES `measurements_delivery`(`id`) ON UPDATE no action ON DELETE no action,
+	FOREIGN KEY (`supersedes_id`) REFERENCES `measurements_reading`(`id`) ON UPDATE no action ON DELETE no action
+);
+--> statement-breakpoint
+CREATE UNIQUE INDEX `measurements_reading_uuid` ON `measurements_reading` (`uuid`);--> statement-breakpoint
+CREATE UNIQUE INDEX `measurements_reading_supersedes` ON `measurements_reading` (`supersedes_id`);--> statement-breakpoint
+CREATE INDEX `measurements_reading_series` ON `measurements_reading` (`point_id`,`parameter_id`,`taken_at`);--> statement-breakpoint
+CREATE INDEX `measurements_reading_taken` ON `measurements_reading` (`taken_at`);--> statement-breakpoint
+CREATE INDEX `measurements_reading_delivery` ON `measurements_reading` (`delivery_id`);--> statement-breakpoint
+CREATE TABLE `measurements_watch_item` (
+	`id` integer PRIMARY KEY NOT NULL,
+	`point_id` integer NOT NULL,
+	`parameter_id` integer NOT NULL,
+	`position` integer NOT NULL,
+	`every_days` integer,
+	`unit` text,
+	`method_id` integer,
+	`instrument_id` integer,
+	`since` integer NOT NULL,
+	`ended_at` integer
+);
+--> statement-breakpoint
+CREATE UNIQUE INDEX `measurements_watch_item_open` ON `measurements_watch_item` (`point_id`,`parameter_id`) WHERE "measurements_watch_item"."ended_at" is null;--> statement-breakpoint
+CREATE TABLE `methods_instrument` (
+	`id` integer PRIMARY KEY NOT NULL,
+	`code` text NOT NULL,
+	`name` text NOT NULL,
+	`serial` text NOT NULL,
+	`principle` text NOT NULL,
+	`scale` text,
+	`state` text NOT NULL,
+	`check_every_days` integer,
+	`retired_reason` text
+);
+--> statement-breakpoint
+CREATE UNIQUE INDEX `methods_instrument_code` ON `methods_instrument` (lower("code"));--> statement-breakpoint
+CREATE TABLE `methods_instrument_check` (
+	`id` integer PRIMARY KEY NOT NULL,
+	`instrument_id` integer NOT NULL,
+	`parameter_id` integer,
+	`checked_at` integer NOT NULL,
+	`checked_by` integer NOT NULL,
+	`standard` text NOT NULL,
+	`standard_value` real,
+	`as_found` real,
+	`as_left` real,
+	`unit` text,
+	`verdict` text NOT NULL,
+	`note` text DEFAULT '' NOT NULL,
+	`due_on` text,
+	FOREIGN KEY (`instrument_id`) REFERENCES `methods_instrument`(`id`) ON UPDATE no action ON DELETE no action,
+	FOREIGN KEY (`parameter_id`) REFERENCES `methods_parameter`(`id`) ON UPDATE no action ON DELETE no action
+);
+--> statement-breakpoint
+CREATE INDEX `methods_instrument_check_latest` ON `methods_instrument_check` (`instrument_id`,`checked_at`);--> statement-breakpoint
+CREATE TABLE `methods_method` (
+	`id` integer PRIMARY KEY NOT NULL,
+	`code` text NOT NULL,
+	`name` text NOT NULL,
+	`parameter_id` integer NOT NULL,
+	`principle` text NOT NULL,
+	`retired_at` integer,
+	FOREIGN KEY (`parameter_id`) REFERENCES `methods_parameter`(`id`) ON UPDATE no action ON DELETE no action
+);
+--> statement-breakpoint
+CREATE UNIQUE INDEX `methods_method_code` ON `methods_method` (lower("code"));--> statement-breakpoint
+CREATE TABLE `methods_parameter` (
+	`id` integer PRIMARY KEY NOT NULL,
+	`code` text NOT NULL,
+	`name` text NOT NULL,
+	`kind` text NOT NULL,
+	`unit` text,
+	`accepted_units` text NOT NULL,
+	`decimals` integer NOT NULL,
+	`plausible_low` real,
+	`plausible_high` real,
+	`choices` text NOT NULL,
+	`parameter_group` text NOT NULL,
+	`may_be_negative` integer NOT NULL,
+	`note` text DEFAULT '' NOT NULL,
+	`retired_at` integer,
+	`retired_reason` text
+);
+--> statement-breakpoint
+CREATE UNIQUE INDEX `methods_parameter_code` ON `methods_parameter` (lower("code"));--> statement-breakpoint
 CREATE TABLE `notifications_mail` (
 	`id` integer PRIMARY KEY NOT NULL,
 	`to_address` text NOT NULL,
@@ -285,4 +472,6 @@ CREATE TABLE `systems_volume_determination` (
 );
 --> statement-breakpoint
 CREATE INDEX `systems_volume_of_record` ON `systems_volume_determination` (`system_id`,`status`,`effective_from_at`);--> statement-breakpoint
-CREATE INDEX `systems_volume_waiting` ON `systems_volume_determination` (`status`);
+CREATE INDEX `systems_volume_waiting` ON `systems_volume_determination` (`status`);--> statement-breakpoint
+CREATE VIEW `measurements_reading_in_force` AS select "measurements_reading"."id" as "id", "measurements_reading"."uuid" as "uuid", "measurements_reading"."point_id" as "point_id", "measurements_reading"."parameter_id" as "parameter_id", "measurements_reading"."typed_text" as "typed_text", "measurements_reading"."typed_unit" as "typed_unit", "measurements_reading"."value" as "value", "measurements_reading"."qualifier" as "qualifier", "measurements_reading"."answer" as "answer", "measurements_reading"."taken_at" as "taken_at", "measurements_reading"."entered_at" as "entered_at", "measurements_reading"."taken_by" as "taken_by", "measurements_reading"."entered_by" as "entered_by", "measurements_reading"."method_id" as "method_id", "measurements_reading"."instrument_id" as "instrument_id", "measurements_reading"."source" as "source", "measurements_reading"."source_ref" as "source_ref", "measurements_reading"."delivery_id" as "delivery_id", "measurements_reading"."note" as "note", "measurements_reading"."supersedes_id" as "supersedes_id", "measurements_reading"."correction_reason" as "correction_reason", "measurements_reading"."confirmed_at" as "confirmed_at", "measurements_reading"."confirmed_by" as "confirmed_by", "measurements_judgement"."id" as "judgement_id", coalesce("measurements_judgement"."status", 'none') as "status", "measurements_judgement"."side" as "side", coalesce("measurements_judgement"."sentence", '') as "sentence", "measurements_judgement"."limit_version_id" as "limit_version_id" from "measurements_reading" left join "measurements_judgement" on "measurements_judgement"."id" = (select max(newest.id) from measurements_judgement newest where newest.reading_id = "measurements_reading"."id") left join "measurements_delivery" on "measurements_delivery"."id" = "measurements_reading"."delivery_id" where "measurements_reading"."voided_at" is null and ("measurements_reading"."delivery_id" is null or ("measurements_delivery"."published_at" is not null and "measurements_delivery"."withdrawn_at" is null)) and not exists (select 1 from measurements_reading later where later.supersedes_id = "measurements_reading"."id");--> statement-breakpoint
+CREATE VIEW `systems_point_directory` AS select "systems_point"."id" as "point_id", "systems_point"."code" as "point_code", "systems_point"."name" as "point_name", "systems_point"."is_default" as "is_default_point", "systems_point"."is_in_use" as "is_point_in_use", "systems_system"."id" as "system_id", "systems_system"."code" as "system_code", "systems_system"."name" as "system_name", "systems_system"."state" as "system_state", "systems_system"."walking_order" as "system_order", "systems_area"."id" as "area_id", "systems_area"."code" as "area_code", "systems_area"."name" as "area_name", "systems_area"."walking_order" as "area_order" from "systems_point" inner join "systems_system" on "systems_system"."id" = "systems_point"."system_id" inner join "systems_area" on "systems_area"."id" = "systems_system"."area_id";

@@ -116,8 +116,147 @@ export type TotalVolume = {
   components: ComponentVolume[];
 };
 
+/** Units in which the lengths and volumes of a component may be typed; the canonical ones come first. */
+export const LENGTH_UNITS = ["m", "cm", "mm", "ft", "in"] as const;
+export type LengthUnit = (typeof LENGTH_UNITS)[number];
+export const VOLUME_UNITS = ["L", "m³", "US gal", "imp gal"] as const;
+export type VolumeUnit = (typeof VOLUME_UNITS)[number];
+
+/** A quantity as it was typed, with its standard uncertainty in the same unit; an empty uncertainty is 0. */
+export type TypedQuantity = { text: string; uncertainty: string };
+
+/** A component as a person typed it; kept beside the canonical one. */
+export type TypedComponent = {
+  name: string;
+  shape: Shape;
+  /** Where the tip of a cone or the crown of a cap is; without meaning for other shapes. */
+  pointing: "up" | "down";
+  lengthUnit: LengthUnit;
+  volumeUnit: VolumeUnit;
+  /** By input name (see SHAPE_INPUTS); all in `lengthUnit`, but the litres of `free-litres` in `volumeUnit`. */
+  dimensions: Record<string, TypedQuantity>;
+  fillDepth: TypedQuantity | null;
+  displacement: TypedQuantity | null;
+  isAtSurface: boolean;
+};
+
 export const DETERMINATION_METHODS = ["geometry", "tracer"] as const;
 export type DeterminationMethod = (typeof DETERMINATION_METHODS)[number];
 
 export const DETERMINATION_STATUSES = ["proposed", "approved", "declined"] as const;
 export type DeterminationStatus = (typeof DETERMINATION_STATUSES)[number];
+
+export type SiteRow = { id: number; code: string; name: string };
+
+export type AreaRow = {
+  id: number;
+  siteId: number;
+  code: string;
+  name: string;
+  biosecurityLevel: number;
+  walkingOrder: number;
+  systemCount: number;
+};
+
+export type SystemRow = {
+  id: number;
+  code: string;
+  name: string;
+  kind: SystemKind;
+  waterType: WaterType;
+  state: SystemState;
+  walkingOrder: number;
+  areaId: number;
+  areaCode: string;
+  areaName: string;
+  biosecurityLevel: number;
+  notes: string;
+  /** The volume of record, litres; null where none has been approved yet. */
+  volumeL: number | null;
+};
+
+export type PointRow = {
+  id: number;
+  code: string;
+  name: string;
+  kind: PointKind;
+  isDefault: boolean;
+  isInUse: boolean;
+  systemId: number;
+  systemCode: string;
+  systemName: string;
+  systemState: SystemState;
+  areaId: number;
+  areaCode: string;
+};
+
+export type EquipmentRow = {
+  id: number;
+  systemId: number;
+  systemCode: string;
+  code: string;
+  name: string;
+  kind: EquipmentKind;
+  state: SystemState;
+  notes: string;
+};
+
+export type SystemDetail = SystemRow & {
+  points: PointRow[];
+  equipment: EquipmentRow[];
+  retiredAt: number | null;
+  retiredReason: string | null;
+};
+
+/** What a determination keeps of its geometry: as typed, and as computed on that day. */
+export type GeometrySnapshot = { typed: TypedComponent[]; computed: ComponentVolume[] };
+
+export type DeterminationRow = {
+  id: number;
+  systemId: number;
+  systemCode: string;
+  method: DeterminationMethod;
+  volumeL: number;
+  standardUncertaintyL: number;
+  surfaceAreaM2: number | null;
+  correlation: number;
+  geometry: GeometrySnapshot | null;
+  note: string;
+  status: DeterminationStatus;
+  proposedById: number;
+  proposedBy: string;
+  proposedAt: number;
+  effectiveFromAt: number;
+  decidedBy: string | null;
+  decidedAt: number | null;
+  decisionReason: string | null;
+  /** True for the one that is the volume of record at the moment asked about. */
+  isOfRecord: boolean;
+  /** How it contradicts the volume of record, as a sentence; null where it does not. */
+  disagreement: string | null;
+};
+
+export type OperatingLevelRow = {
+  levelOffsetM: number;
+  levelOffsetUncertaintyM: number;
+  isDrained: boolean;
+  reason: string;
+  setBy: string | null;
+  setAt: number;
+};
+
+export type VolumeSheet = {
+  system: SystemRow;
+  record: DeterminationRow | null;
+  level: OperatingLevelRow | null;
+  /** What the system holds today, litres; null with a sentence that says why where it cannot be told. */
+  operating: Measured | null;
+  operatingSays: string | null;
+  /** The other systems that share this water, those the reader may see. */
+  joinedWith: { id: number; code: string; name: string; operating: Measured | null }[];
+  /** Joined systems in areas the reader may not see. */
+  joinedElsewhere: number;
+  /** What the whole joined body of water holds; null when not joined or when a part cannot be told. */
+  joinedTotal: Measured | null;
+  determinations: DeterminationRow[];
+};

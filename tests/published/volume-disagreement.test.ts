@@ -14,7 +14,7 @@ describe("two determinations of one volume", () => {
     expect(verdict.ratio).toBe(3);
     expect(verdict.disagrees).toBe(true);
     expect(verdict.sentence).toContain("differ by 150 L");
-    expect(verdict.sentence).toContain("50 L");
+    expect(verdict.sentence).toContain("3.0 times the standard uncertainty of their difference (50.0 L)");
   });
 
   it("contradict each other when both are called exact and differ, and not when they are equal", () => {

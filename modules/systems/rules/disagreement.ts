@@ -1,3 +1,4 @@
+import { numberText } from "@/lib/ui/number-text";
 import type { Measured } from "../model";
 
 /** Two results further apart than this many standard uncertainties of their difference are pointed out. */
@@ -42,9 +43,15 @@ export function disagreement(first: Measured, second: Measured): Disagreement {
 }
 
 function sentenceOf(differenceL: number, togetherL: number, ratio: number): string {
-  const litres = (value: number) => `${value.toLocaleString("en-GB", { maximumSignificantDigits: 3 })} L`;
-  const times = Number.isFinite(ratio)
-    ? `${ratio.toLocaleString("en-GB", { maximumSignificantDigits: 2 })} times the ${litres(togetherL)} that their uncertainties allow one standard deviation`
+  const apart = `The two volumes differ by ${significant(differenceL, 3)} L`;
+  const against = Number.isFinite(ratio)
+    ? `which is ${significant(ratio, 2)} times the standard uncertainty of their difference (${significant(togetherL, 3)} L)`
     : "although both are given as exact";
-  return `The two volumes differ by ${litres(differenceL)}, ${times}: one of them, or its uncertainty, is wrong. Measure again before relying on either.`;
+  return `${apart}, ${against}: one of them, or its uncertainty, is wrong. Measure again before relying on either.`;
+}
+
+/** A positive number with so many significant figures, as the screen writes it. */
+function significant(value: number, figures: number): string {
+  const magnitude = Math.floor(Math.log10(value));
+  return numberText(value, Math.min(12, Math.max(0, figures - 1 - magnitude)));
 }

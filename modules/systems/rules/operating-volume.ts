@@ -9,6 +9,14 @@ export type OperatingLevel = {
   isDrained: boolean;
 };
 
+/** The level lies below the floor: the volume would be less than nothing. */
+export class BelowFloorError extends RangeError {
+  constructor() {
+    super("The level lies further down than the system is deep: mark it as drained instead.");
+    this.name = "BelowFloorError";
+  }
+}
+
 /**
  * How much water does a system hold today? Good for level changes small enough that the surface keeps its area.
  *
@@ -35,9 +43,7 @@ export function operatingVolume(
     );
   }
   const value = recordL.value + LITRES_PER_CUBIC_METRE * surfaceAreaM2.value * levelOffsetM.value;
-  if (value < 0) {
-    throw new RangeError("The level lies further down than the system is deep: mark it as drained instead.");
-  }
+  if (value < 0) throw new BelowFloorError();
   const standardUncertainty = combineUncorrelated([
     { sensitivity: 1, standardUncertainty: recordL.standardUncertainty },
     {

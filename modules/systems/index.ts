@@ -1,0 +1,25 @@
+import "server-only";
+
+export { systemsMay } from "./abilities";
+export { addEquipment } from "./commands/add-equipment";
+export { addPoint } from "./commands/add-point";
+export { approveVolume } from "./commands/approve-volume";
+export { createArea } from "./commands/create-area";
+export { createSite } from "./commands/create-site";
+export { createSystem } from "./commands/create-system";
+export { declineVolume } from "./commands/decline-volume";
+export { editArea } from "./commands/edit-area";
+export { editEquipment } from "./commands/edit-equipment";
+export { editPoint } from "./commands/edit-point";
+export { editSystem } from "./commands/edit-system";
+export { proposeVolume } from "./commands/propose-volume";
+export { retireSystem } from "./commands/retire-system";
+export { setOperatingLevel } from "./commands/set-operating-level";
+export { systemsEvents } from "./events";
+export { getSystem } from "./queries/get-system";
+export { listAreas, listSites } from "./queries/list-areas";
+export { listEquipment, listPoints } from "./queries/list-points";
+export { listSystems } from "./queries/list-systems";
+export { listWaitingVolumes, type WaitingVolume } from "./queries/list-waiting-volumes";
+export { volumeOf } from "./queries/volume-of";
+export { getPoint, getSystemById, pointsById } from "./records";
