@@ -156,3 +156,19 @@ export type JudgementCause = (typeof JUDGEMENT_CAUSES)[number];
 /** The way of proposed limits. */
 export const LIMIT_STATES = ["proposed", "approved", "declined"] as const;
 export type LimitState = (typeof LIMIT_STATES)[number];
+
+/** What the server answers to one reading that was sent. `status` is null where it had been sent before. */
+export interface ReadingAnswer {
+  readonly uuid: string;
+  readonly readingId: number;
+  readonly isRepeat: boolean;
+  readonly status: Status | null;
+  readonly side: Side | null;
+  readonly sentence: string;
+  readonly mustBeConfirmed: boolean;
+}
+
+/** A value that is off by so much is confirmed by a person, or measured again. */
+export function needsConfirmation(status: Status): boolean {
+  return status === "out" || status === "implausible";
+}

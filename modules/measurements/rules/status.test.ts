@@ -320,7 +320,7 @@ describe("laws", () => {
           const possible = parts
             .map((part) => (qualifier === "<" ? from + part * (x - from) : x + part * (to - x)))
             .filter((value) => !nearlyEqual(value, x))
-            .filter((value) => (qualifier === "<" ? value < x && value >= from : value > x && value <= to));
+            .filter((value) => (qualifier === "<" ? value < x : value > x) && value >= from && value <= to);
           for (const value of possible) {
             if (verdict.status !== "unjudged")
               expect([value, status(value, limits, over)]).toEqual([value, verdict.status]);

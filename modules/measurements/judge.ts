@@ -1,0 +1,144 @@
+import { and, asc, desc, eq, gte, lte, ne } from "drizzle-orm";
+import type { Orm } from "@/db/database";
+import { invariant } from "@/lib/invariant";
+import { unitLabel } from "@/lib/units/factors";
+import type { FacilityParameter } from "@/modules/methods/model";
+import { getParameter } from "@/modules/methods";
+import { approvedVersions } from "./limits";
+import { limitsAt } from "./rules/limits-at";
+import { settings } from "@/lib/env";
+import type { JudgementCause, LimitVersion, ReadingValue, StatusVerdict } from "./model";
+import { STATUS_RULE_VERSION } from "./model";
+import { CHANGE_WINDOW_MS, type Change24h, dependentWindow, greatestChange24h, type TimedValue } from "./rules/change-24h";
+import { judgeReading } from "./rules/status";
+import { judgement, readingInForce } from "./schema";
+
+/** What of a stored reading a judgement rests on. */
+export type Judged = {
+  id: number;
+  pointId: number;
+  parameterId: number;
+  value: number | null;
+  qualifier: ReadingValue["qualifier"];
+  answer: string | null;
+  takenAt: number;
+};
+
+/** Plain values of the same point and parameter in the 24 h up to a moment that may stand for a change. */
+export function precedingValues(db: Orm, of: Judged): TimedValue[] {
+  return db
+    .select({
+      id: readingInForce.id,
+      takenAt: readingInForce.takenAt,
+      value: readingInForce.value,
+      qualifier: readingInForce.qualifier,
+    })
+    .from(readingInForce)
+    .where(
+      and(
+        eq(readingInForce.pointId, of.pointId),
+        eq(readingInForce.parameterId, of.parameterId),
+        gte(readingInForce.takenAt, of.takenAt - CHANGE_WINDOW_MS),
+        lte(readingInForce.takenAt, of.takenAt),
+        ne(readingInForce.id, of.id),
+        ne(readingInForce.status, "implausible"),
+      ),
+    )
+    .orderBy(asc(readingInForce.takenAt))
+    .all();
+}
+
+/** Judges one reading by the limits in force when it was taken. Pure decision over what is given; writes nothing. */
+export function verdictOn(
+  of: Judged,
+  parameter: FacilityParameter,
+  versions: readonly LimitVersion[],
+  preceding: readonly TimedValue[],
+): { verdict: StatusVerdict; limitVersionId: number | null } {
+  const limits = limitsAt(versions, of.takenAt, settings().STILLWELL_ZONE);
+  const change: Change24h | null = greatestChange24h(of, preceding);
+  const means = parameter.choices.find((choice) => choice.code === of.answer)?.means;
+  const verdict = judgeReading({
+    kind: parameter.kind,
+    plausible: parameter.plausible,
+    mayBeNegative: parameter.mayBeNegative,
+    reading: { value: of.value, qualifier: of.qualifier, text: of.answer ?? "" },
+    limits,
+    change,
+    decimals: parameter.decimals,
+    unit: unitLabel(parameter.unit),
+    ...(means ? { answerMeans: means } : {}),
+  });
+  return { verdict, limitVersionId: limits.state === "none" ? null : limits.versionId };
+}
+
+type Stored = { status: string; sentence: string; limitVersionId: number | null };
+
+function latestJudgement(db: Orm, readingId: number): Stored | undefined {
+  return db
+    .select({ status: judgement.status, sentence: judgement.sentence, limitVersionId: judgement.limitVersionId })
+    .from(judgement)
+    .where(eq(judgement.readingId, readingId))
+    .orderBy(desc(judgement.id))
+    .limit(1)
+    .get();
+}
+
+/** Judges a reading and appends the judgement, where it is the first or says something new. Answers the verdict. */
+export function judgeAndStore(
+  db: Orm,
+  of: Judged,
+  at: number,
+  cause: JudgementCause,
+  parameter = getParameter(db, of.parameterId),
+  versions = approvedVersions(db, of.pointId, of.parameterId),
+): StatusVerdict {
+  const { verdict, limitVersionId } = verdictOn(of, parameter, versions, precedingValues(db, of));
+  const before = latestJudgement(db, of.id);
+  const isSame =
+    before !== undefined &&
+    before.status === verdict.status &&
+    before.sentence === verdict.sentence &&
+    before.limitVersionId === limitVersionId;
+  if (!isSame) {
+    db.insert(judgement)
+      .values({
+        readingId: of.id,
+        status: verdict.status,
+        side: verdict.side,
+        sentence: verdict.sentence,
+        reasons: [...verdict.reasons],
+        limitVersionId,
+        ruleVersion: STATUS_RULE_VERSION,
+        cause,
+        judgedAt: at,
+      })
+      .run();
+  }
+  return verdict;
+}
+
+/** Readings in force whose judgement may rest on what was taken at `takenAt`: those of the 24 h after it. */
+export function judgeDependents(db: Orm, around: Judged, at: number, cause: JudgementCause): number {
+  const { fromAt, toAt } = dependentWindow(around.takenAt);
+  const dependents = db
+    .select()
+    .from(readingInForce)
+    .where(
+      and(
+        eq(readingInForce.pointId, around.pointId),
+        eq(readingInForce.parameterId, around.parameterId),
+        gte(readingInForce.takenAt, fromAt),
+        lte(readingInForce.takenAt, toAt),
+        ne(readingInForce.id, around.id),
+      ),
+    )
+    .orderBy(asc(readingInForce.takenAt))
+    .all();
+  invariant(dependents.length < 100_000, "a day of readings of one point");
+  if (dependents.length === 0) return 0;
+  const parameter = getParameter(db, around.parameterId);
+  const versions = approvedVersions(db, around.pointId, around.parameterId);
+  for (const dependent of dependents) judgeAndStore(db, dependent, at, cause, parameter, versions);
+  return dependents.length;
+}

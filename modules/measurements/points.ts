@@ -1,0 +1,23 @@
+import { eq, inArray } from "drizzle-orm";
+import type { Orm } from "@/db/database";
+import { notFound } from "@/lib/problem";
+import { pointDirectory } from "@/modules/systems";
+
+export type PointPlace = typeof pointDirectory.$inferSelect;
+
+/** Where a point is. @throws Problem `not-found` */
+export function getPoint(db: Orm, pointId: number): PointPlace {
+  const row = db.select().from(pointDirectory).where(eq(pointDirectory.pointId, pointId)).get();
+  if (!row) throw notFound("such point");
+  return row;
+}
+
+/** The areas in which points lie; a point that does not exist is left out (the command itself refuses it). */
+export function areasOfPoints(db: Orm, pointIds: readonly number[]): number[] {
+  const rows = db
+    .selectDistinct({ areaId: pointDirectory.areaId })
+    .from(pointDirectory)
+    .where(inArray(pointDirectory.pointId, [...new Set(pointIds)]))
+    .all();
+  return rows.map((row) => row.areaId);
+}
