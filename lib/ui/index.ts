@@ -16,6 +16,7 @@ export {
   type RadioButtonsProps,
   type RadioOption,
 } from "./choices";
+export { CspNonceProvider, useCspNonce } from "./csp-nonce";
 export { type DataColumn, DataTable, type DataTableProps } from "./data-table";
 export { Dialog, type DialogProps } from "./dialog";
 export { EmptyState, type EmptyStateProps } from "./empty-state";

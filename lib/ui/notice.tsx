@@ -26,7 +26,7 @@ export function Notice({ kind = "info", title, children, actions }: NoticeProps)
           {title}
         </p>
       )}
-      {children !== undefined && <div className="prose text-[0.9375rem]">{children}</div>}
+      {children !== undefined && <div className="prose mt-0.5 text-[0.9375rem]">{children}</div>}
       {actions !== undefined && <div className="mt-3 flex flex-wrap gap-2.5">{actions}</div>}
     </div>
   );

@@ -26,7 +26,8 @@ export function Panel({
   children,
 }: PanelProps) {
   const Heading = headingLevel === 2 ? "h2" : "h3";
-  const frame = look === "sheet" ? "panel border border-rule bg-sheet px-4 py-4 sm:px-5" : "panel";
+  const frame =
+    look === "sheet" ? "panel min-w-0 border border-rule bg-sheet px-4 py-4 sm:px-5" : "panel min-w-0";
   return (
     <section
       id={id}

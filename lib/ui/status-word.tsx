@@ -24,7 +24,7 @@ export interface StatusWordProps {
   status: StatusCode;
   /** The way the value went: a triangle points there. */
   direction?: StatusDirection;
-  /** Said after the word: ", below 6.5". */
+  /** Said after the word: "below 6.5". */
   detail?: string;
   /** Says nothing when all is well (the word stays for assistive technology). */
   quietWhenWithin?: boolean;
@@ -39,18 +39,17 @@ export function StatusWord({
   quietWhenWithin = false,
   className = "",
 }: StatusWordProps) {
-  const words = `${STATUS_WORDS[status]}${detail === undefined ? "" : detail}`;
-  if (status === "within" && quietWhenWithin) return <span className="sr-only">{words}</span>;
+  const word = STATUS_WORDS[status];
+  if (status === "within" && quietWhenWithin) return <span className="sr-only">{word}</span>;
   return (
     <span className={`inline-flex items-baseline gap-[0.4em] whitespace-nowrap ${TONE[status]} ${className}`}>
       <StatusShape status={status} direction={direction} />
       <span
-        className={
-          status === "implausible" ? "border-b-[1.5px] border-dashed border-odd-mark" : "whitespace-normal"
-        }
+        className={status === "implausible" ? "border-b-[1.5px] border-dashed border-odd-mark" : undefined}
       >
-        {words}
+        {word}
       </span>
+      {detail !== undefined && <span className="font-normal whitespace-normal">{detail}</span>}
     </span>
   );
 }

@@ -90,8 +90,22 @@ export function wellStripScale(input: WellStripInput): WellStripScale | null {
   };
 }
 
+const NUMBERS = [
+  "value",
+  "previous",
+  "target",
+  "toleranceLow",
+  "toleranceHigh",
+  "watchLow",
+  "watchHigh",
+  "possibleLow",
+  "possibleHigh",
+  "decimals",
+] as const;
+
 function read(input: WellStripInput): Known {
-  for (const [name, x] of Object.entries(input)) {
+  for (const name of NUMBERS) {
+    const x = input[name];
     if (x !== null && x !== undefined && !Number.isFinite(x))
       throw new RangeError(`${name} is not a finite number`);
   }

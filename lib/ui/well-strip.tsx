@@ -62,9 +62,19 @@ function Zones({ scale, shape }: PartProps) {
   const height = shape.tube - 1.6;
   if (band === null) return null;
   const wide = (span: { from: number; to: number }) => `${(90 * (span.to - span.from)).toFixed(3)}%`;
+  const open = band.hardFrom ? (band.hardTo ? undefined : "high") : band.hardTo ? "low" : "both";
+  const left = band.hardFrom ? 5 + 90 * band.from : 0;
+  const right = band.hardTo ? 5 + 90 * band.to : 100;
   return (
     <>
-      <rect x={at(band.from)} y={y} width={wide(band)} height={height} className="ws-band" />
+      <rect
+        x={`${left.toFixed(3)}%`}
+        y={y}
+        width={`${(right - left).toFixed(3)}%`}
+        height={height}
+        className="ws-band"
+        data-open={open}
+      />
       {shoulders.map((span) => (
         <rect
           key={span.from}
