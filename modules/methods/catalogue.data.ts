@@ -1,0 +1,622 @@
+import type { AnswerMeaning, ParameterChoice, ParameterDefinition, ParameterGroup } from "./model";
+
+/**
+ * The starter catalogue for marine work: what a facility can measure on the first day and may change afterwards.
+ * Plausible bounds say what a value can be at all in water people keep animals in or make for them, wide on purpose;
+ * they are no limits. Common practice, no source, except where a note names one.
+ */
+
+type Range = readonly [low: number | null, high: number | null];
+
+interface NumberRow {
+  readonly code: string;
+  readonly name: string;
+  readonly unit: string | null;
+  readonly accepted?: readonly string[];
+  readonly decimals: number;
+  readonly plausible: Range;
+  readonly group: ParameterGroup;
+  readonly negative?: boolean;
+  readonly note?: string;
+}
+
+const quantity = (row: NumberRow, kind: "number" | "count" = "number"): ParameterDefinition => ({
+  code: row.code,
+  name: row.name,
+  kind,
+  unit: row.unit,
+  acceptedUnits: row.unit === null ? [] : [row.unit, ...(row.accepted ?? [])],
+  decimals: row.decimals,
+  plausible: { low: row.plausible[0], high: row.plausible[1] },
+  choices: [],
+  group: row.group,
+  mayBeNegative: row.negative ?? false,
+  note: row.note ?? "",
+});
+
+const answered = (
+  kind: "yes-no" | "choice",
+  code: string,
+  name: string,
+  group: ParameterGroup,
+  choices: readonly (readonly [code: string, label: string, means: AnswerMeaning])[],
+  note = "",
+): ParameterDefinition => ({
+  code,
+  name,
+  kind,
+  unit: null,
+  acceptedUnits: [],
+  decimals: 0,
+  plausible: { low: null, high: null },
+  choices: choices.map(([choice, label, means]): ParameterChoice => ({ code: choice, label, means })),
+  group,
+  mayBeNegative: false,
+  note,
+});
+
+const yesNo = (code: string, name: string, group: ParameterGroup, bad: "yes" | "no", means: AnswerMeaning) =>
+  answered("yes-no", code, name, group, [
+    ["yes", "Yes", bad === "yes" ? means : "within"],
+    ["no", "No", bad === "no" ? means : "within"],
+  ]);
+
+const text = (code: string, name: string, group: ParameterGroup, note = ""): ParameterDefinition => ({
+  ...answered("choice", code, name, group, [], note),
+  kind: "text",
+});
+
+const MASS_PER_VOLUME = ["µg/L"];
+const GAUGE = ["bar", "psi", "mbar"];
+const FLOWS = ["L/min", "L/h", "L/s", "US gpm"];
+
+export const PARAMETER_CATALOGUE: readonly ParameterDefinition[] = [
+  // physics
+  quantity({
+    code: "temperature",
+    name: "Temperature",
+    unit: "°C",
+    accepted: ["°F", "K"],
+    decimals: 1,
+    plausible: [-2.5, 45],
+    group: "physics",
+    negative: true,
+  }),
+  quantity({
+    code: "salinity",
+    name: "Salinity",
+    unit: "psu",
+    accepted: [
+      "g/kg",
+      "SG 20/20 °C",
+      "SG 25/25 °C",
+      "SG 60/60 °F",
+      "SG 77/60 °F",
+      "SG 25/4 °C",
+      "mS/cm (salinity)",
+      "mS/cm at 25 °C (salinity)",
+    ],
+    decimals: 1,
+    plausible: [0, 60],
+    group: "physics",
+    note: "Practical salinity (PSS-78). A specific gravity names its two temperatures.",
+  }),
+  quantity({
+    code: "conductivity",
+    name: "Conductivity",
+    unit: "mS/cm",
+    accepted: ["µS/cm", "S/m"],
+    decimals: 2,
+    plausible: [0, 100],
+    group: "physics",
+    note: "At the temperature of the sample unless the method says otherwise.",
+  }),
+  quantity({
+    code: "turbidity",
+    name: "Turbidity",
+    unit: "NTU",
+    accepted: ["FNU"],
+    decimals: 2,
+    plausible: [0, 1000],
+    group: "physics",
+  }),
+  quantity({
+    code: "water_level",
+    name: "Water level",
+    unit: "cm",
+    accepted: ["mm", "m", "in", "ft"],
+    decimals: 1,
+    plausible: [-500, 2000],
+    group: "physics",
+    negative: true,
+    note: "Against the mark of the system; negative below it.",
+  }),
+  quantity({
+    code: "illuminance",
+    name: "Illuminance",
+    unit: "lx",
+    accepted: ["klx"],
+    decimals: 0,
+    plausible: [0, 200000],
+    group: "physics",
+  }),
+  quantity({
+    code: "photon_flux",
+    name: "Photosynthetic photon flux density",
+    unit: "µmol/m²/s",
+    decimals: 0,
+    plausible: [0, 3000],
+    group: "physics",
+  }),
+  quantity({
+    code: "air_temperature",
+    name: "Air temperature",
+    unit: "°C",
+    accepted: ["°F", "K"],
+    decimals: 1,
+    plausible: [-40, 60],
+    group: "physics",
+    negative: true,
+  }),
+
+  // gases
+  quantity({
+    code: "oxygen",
+    name: "Dissolved oxygen",
+    unit: "mg/L O2",
+    accepted: ["mL/L O2", "µmol/L O2"],
+    decimals: 2,
+    plausible: [0, 40],
+    group: "gases",
+  }),
+  quantity({
+    code: "oxygen_saturation",
+    name: "Oxygen saturation",
+    unit: "%",
+    decimals: 1,
+    plausible: [0, 300],
+    group: "gases",
+  }),
+  quantity({
+    code: "total_gas_pressure",
+    name: "Total gas pressure",
+    unit: "%",
+    decimals: 1,
+    plausible: [50, 200],
+    group: "gases",
+    note: "Per cent of barometric pressure.",
+  }),
+  quantity({
+    code: "barometric_pressure",
+    name: "Barometric pressure",
+    unit: "kPa",
+    accepted: ["mbar", "mmHg", "inHg", "atm"],
+    decimals: 2,
+    plausible: [50, 110],
+    group: "gases",
+  }),
+  quantity({
+    code: "carbon_dioxide",
+    name: "Carbon dioxide",
+    unit: "mg/L",
+    accepted: MASS_PER_VOLUME,
+    decimals: 1,
+    plausible: [0, 200],
+    group: "gases",
+  }),
+
+  // pH and alkalinity
+  quantity({
+    code: "ph_nbs",
+    name: "pH (NBS buffers)",
+    unit: "pH",
+    decimals: 2,
+    plausible: [4, 11],
+    group: "ph-and-alkalinity",
+    note: "Electrode set with NBS (NIST) buffers. About 0.13 above the total scale in seawater.",
+  }),
+  quantity({
+    code: "ph_total",
+    name: "pH (total scale)",
+    unit: "pH",
+    decimals: 3,
+    plausible: [4, 11],
+    group: "ph-and-alkalinity",
+    note: "Total hydrogen ion scale (Dickson, Sabine & Christian 2007).",
+  }),
+  quantity({
+    code: "alkalinity",
+    name: "Total alkalinity",
+    unit: "meq/L",
+    accepted: ["dKH", "mg/L CaCO3", "µmol/kg", "°fH"],
+    decimals: 2,
+    plausible: [0, 15],
+    group: "ph-and-alkalinity",
+  }),
+  quantity({
+    code: "orp",
+    name: "Redox potential",
+    unit: "mV",
+    accepted: ["V"],
+    decimals: 0,
+    plausible: [-600, 1200],
+    group: "ph-and-alkalinity",
+    negative: true,
+    note: "As the electrode shows it; name the reference electrode in the method.",
+  }),
+
+  // nutrients
+  quantity({
+    code: "ammonia_n",
+    name: "Total ammonia nitrogen",
+    unit: "mg/L NH3-N",
+    accepted: ["mg/L NH3", "mg/L NH4", "µmol/L N"],
+    decimals: 3,
+    plausible: [0, 100],
+    group: "nutrients",
+  }),
+  quantity({
+    code: "free_ammonia_n",
+    name: "Un-ionised ammonia nitrogen",
+    unit: "mg/L NH3-N",
+    accepted: ["mg/L NH3"],
+    decimals: 4,
+    plausible: [0, 20],
+    group: "nutrients",
+  }),
+  quantity({
+    code: "nitrite_n",
+    name: "Nitrite nitrogen",
+    unit: "mg/L NO2-N",
+    accepted: ["mg/L NO2", "µmol/L NO2"],
+    decimals: 3,
+    plausible: [0, 100],
+    group: "nutrients",
+  }),
+  quantity({
+    code: "nitrate",
+    name: "Nitrate",
+    unit: "mg/L NO3",
+    accepted: ["mg/L NO3-N", "µmol/L NO3"],
+    decimals: 1,
+    plausible: [0, 2000],
+    group: "nutrients",
+  }),
+  quantity({
+    code: "phosphate",
+    name: "Phosphate",
+    unit: "mg/L PO4",
+    accepted: ["mg/L PO4-P", "µg/L P", "µmol/L PO4"],
+    decimals: 3,
+    plausible: [0, 50],
+    group: "nutrients",
+  }),
+  quantity({
+    code: "silicate",
+    name: "Silicate",
+    unit: "mg/L SiO2",
+    accepted: ["mg/L Si"],
+    decimals: 2,
+    plausible: [0, 100],
+    group: "nutrients",
+  }),
+
+  // ions and metals
+  quantity({
+    code: "calcium",
+    name: "Calcium",
+    unit: "mg/L Ca",
+    accepted: ["mmol/L Ca", "mg/L Ca as CaCO3"],
+    decimals: 0,
+    plausible: [0, 1500],
+    group: "ions-and-metals",
+  }),
+  quantity({
+    code: "magnesium",
+    name: "Magnesium",
+    unit: "mg/L Mg",
+    accepted: ["mmol/L Mg"],
+    decimals: 0,
+    plausible: [0, 4000],
+    group: "ions-and-metals",
+  }),
+  quantity({
+    code: "potassium",
+    name: "Potassium",
+    unit: "mg/L",
+    accepted: MASS_PER_VOLUME,
+    decimals: 0,
+    plausible: [0, 1500],
+    group: "ions-and-metals",
+  }),
+  quantity({
+    code: "strontium",
+    name: "Strontium",
+    unit: "mg/L",
+    accepted: MASS_PER_VOLUME,
+    decimals: 1,
+    plausible: [0, 50],
+    group: "ions-and-metals",
+  }),
+  quantity({
+    code: "iodine",
+    name: "Iodine, total",
+    unit: "µg/L",
+    accepted: ["mg/L"],
+    decimals: 0,
+    plausible: [0, 1000],
+    group: "ions-and-metals",
+  }),
+  quantity({
+    code: "copper",
+    name: "Copper, dissolved",
+    unit: "µg/L",
+    accepted: ["mg/L"],
+    decimals: 1,
+    plausible: [0, 2000],
+    group: "ions-and-metals",
+    note: "Treatments with copper are a veterinarian's decision.",
+  }),
+  quantity({
+    code: "iron",
+    name: "Iron, total",
+    unit: "µg/L",
+    accepted: ["mg/L"],
+    decimals: 0,
+    plausible: [0, 5000],
+    group: "ions-and-metals",
+  }),
+  quantity({
+    code: "zinc",
+    name: "Zinc, total",
+    unit: "µg/L",
+    accepted: ["mg/L"],
+    decimals: 0,
+    plausible: [0, 5000],
+    group: "ions-and-metals",
+  }),
+
+  // disinfection
+  quantity({
+    code: "free_chlorine",
+    name: "Free chlorine",
+    unit: "mg/L",
+    accepted: MASS_PER_VOLUME,
+    decimals: 2,
+    plausible: [0, 20],
+    group: "disinfection",
+  }),
+  quantity({
+    code: "total_chlorine",
+    name: "Total chlorine",
+    unit: "mg/L",
+    accepted: MASS_PER_VOLUME,
+    decimals: 2,
+    plausible: [0, 20],
+    group: "disinfection",
+    note: "In seawater read as total residual oxidant.",
+  }),
+  quantity({
+    code: "residual_oxidant",
+    name: "Total residual oxidant",
+    unit: "mg/L",
+    accepted: MASS_PER_VOLUME,
+    decimals: 3,
+    plausible: [0, 20],
+    group: "disinfection",
+    note: "As Cl2; what ozone leaves in seawater.",
+  }),
+  quantity({
+    code: "ozone_in_air",
+    name: "Ozone in room air",
+    unit: "µg/L",
+    accepted: ["mg/L"],
+    decimals: 2,
+    plausible: [0, 50],
+    group: "disinfection",
+    note: "1 µg/L is 1 mg/m³. Follow the facility's ozone procedure; this is no safety alarm.",
+  }),
+  quantity({
+    code: "bromate",
+    name: "Bromate",
+    unit: "µg/L",
+    accepted: ["mg/L"],
+    decimals: 0,
+    plausible: [0, 10000],
+    group: "disinfection",
+  }),
+
+  // microbiology
+  quantity(
+    {
+      code: "enterococci",
+      name: "Enterococci",
+      unit: "CFU/100 mL",
+      accepted: ["MPN/100 mL", "CFU/mL"],
+      decimals: 0,
+      plausible: [0, 1e7],
+      group: "microbiology",
+    },
+    "count",
+  ),
+  quantity(
+    {
+      code: "coliforms",
+      name: "Total coliforms",
+      unit: "CFU/100 mL",
+      accepted: ["MPN/100 mL", "CFU/mL"],
+      decimals: 0,
+      plausible: [0, 1e7],
+      group: "microbiology",
+    },
+    "count",
+  ),
+  quantity(
+    {
+      code: "e_coli",
+      name: "Escherichia coli",
+      unit: "CFU/100 mL",
+      accepted: ["MPN/100 mL", "CFU/mL"],
+      decimals: 0,
+      plausible: [0, 1e7],
+      group: "microbiology",
+    },
+    "count",
+  ),
+  quantity(
+    {
+      code: "heterotrophic_count",
+      name: "Heterotrophic plate count",
+      unit: "CFU/mL",
+      accepted: ["CFU/100 mL"],
+      decimals: 0,
+      plausible: [0, 1e8],
+      group: "microbiology",
+    },
+    "count",
+  ),
+  quantity(
+    {
+      code: "vibrio_count",
+      name: "Presumptive vibrio count",
+      unit: "CFU/mL",
+      accepted: ["CFU/100 mL"],
+      decimals: 0,
+      plausible: [0, 1e8],
+      group: "microbiology",
+    },
+    "count",
+  ),
+
+  // source water and purifier
+  quantity({
+    code: "conductivity_low",
+    name: "Conductivity of feed and product water",
+    unit: "µS/cm",
+    accepted: ["mS/cm"],
+    decimals: 1,
+    plausible: [0, 5000],
+    group: "source-water",
+    note: "Feed water, permeate and DI water; each at its own point.",
+  }),
+  quantity({
+    code: "dissolved_solids",
+    name: "Total dissolved solids",
+    unit: "mg/L",
+    accepted: ["g/L"],
+    decimals: 0,
+    plausible: [0, 50000],
+    group: "source-water",
+    note: "As the meter computes it from conductivity; its factor belongs in the method.",
+  }),
+  quantity({
+    code: "general_hardness",
+    name: "Total hardness",
+    unit: "mg/L CaCO3",
+    accepted: ["°Clark", "°fH"],
+    decimals: 0,
+    plausible: [0, 8000],
+    group: "source-water",
+  }),
+  quantity({
+    code: "membrane_pressure",
+    name: "Pressure before the membrane",
+    unit: "kPa",
+    accepted: GAUGE,
+    decimals: 0,
+    plausible: [0, 8000],
+    group: "source-water",
+  }),
+  quantity({
+    code: "permeate_flow",
+    name: "Permeate flow",
+    unit: "L/h",
+    accepted: ["L/min", "m³/h", "US gpm"],
+    decimals: 0,
+    plausible: [0, 50000],
+    group: "source-water",
+  }),
+
+  // equipment
+  yesNo("pump_running", "Circulation pump running", "equipment", "no", "out"),
+  yesNo("heater_on", "Heater or chiller under control", "equipment", "no", "out"),
+  yesNo("leak_seen", "Leak seen", "equipment", "yes", "out"),
+  yesNo("uv_on", "Ultraviolet lamp lit", "equipment", "no", "watch"),
+  yesNo("ozone_on", "Ozone generator running as set", "equipment", "no", "watch"),
+  quantity({
+    code: "filter_pressure",
+    name: "Filter pressure",
+    unit: "kPa",
+    accepted: GAUGE,
+    decimals: 0,
+    plausible: [-100, 1000],
+    group: "equipment",
+    negative: true,
+    note: "Gauge pressure before the filter; negative on a suction side.",
+  }),
+  quantity({
+    code: "filter_pressure_drop",
+    name: "Pressure drop across the filter",
+    unit: "kPa",
+    accepted: [...GAUGE, "mH2O"],
+    decimals: 0,
+    plausible: [0, 1000],
+    group: "equipment",
+  }),
+  quantity({
+    code: "circulation_flow",
+    name: "Circulation flow",
+    unit: "m³/h",
+    accepted: FLOWS,
+    decimals: 1,
+    plausible: [0, 5000],
+    group: "equipment",
+  }),
+  quantity({
+    code: "pump_current",
+    name: "Pump current",
+    unit: "A",
+    accepted: ["mA"],
+    decimals: 1,
+    plausible: [0, 400],
+    group: "equipment",
+  }),
+  quantity(
+    {
+      code: "backwash_count",
+      name: "Backwashes since the last check",
+      unit: "count",
+      decimals: 0,
+      plausible: [0, 100],
+      group: "equipment",
+    },
+    "count",
+  ),
+  answered("choice", "skimmer_state", "Foam fractionator", "equipment", [
+    ["steady", "Steady foam", "within"],
+    ["weak", "Weak foam", "watch"],
+    ["overflowing", "Overflowing", "out"],
+    ["stopped", "Stopped", "out"],
+    ["off-on-purpose", "Off on purpose", "none"],
+  ]),
+
+  // observation
+  answered("choice", "water_clarity", "Water clarity", "observation", [
+    ["clear", "Clear", "within"],
+    ["slightly-cloudy", "Slightly cloudy", "watch"],
+    ["cloudy", "Cloudy", "out"],
+  ]),
+  answered("choice", "surface_film", "Surface", "observation", [
+    ["clean", "Clean", "within"],
+    ["film", "Film", "watch"],
+    ["foam", "Foam", "watch"],
+  ]),
+  answered("choice", "animal_behaviour", "Animals at a glance", "observation", [
+    ["usual", "As usual", "within"],
+    ["unsettled", "Unsettled", "watch"],
+    ["distressed", "Distressed or gasping", "out"],
+    ["not-seen", "Not seen", "none"],
+  ]),
+  yesNo("dead_animal_found", "Dead animal found", "observation", "yes", "out"),
+  text("remark", "Remark", "observation", "Free words about the system; never judged."),
+];
