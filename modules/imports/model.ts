@@ -187,6 +187,18 @@ export type RowDefaults = {
   method?: string;
   instrument?: string;
   takenBy?: string;
+  /** "HH:MM" for dates that come without a time of day; the readings are remarked `time-missing`. */
+  timeOfDay?: string;
+};
+
+/** How a file's cells are to be read, once its questions are answered. */
+export type RowContext = {
+  kind: FileKind;
+  /** The facility's IANA zone, in which times without an offset are meant. */
+  zone: string;
+  serialEpoch: SerialEpoch;
+  answers: FileAnswers;
+  defaults: RowDefaults;
 };
 
 /** What is known about a file before its rows are read. */

@@ -1,0 +1,70 @@
+import type { ImportField } from "@/modules/imports/model";
+
+/**
+ * Words by which a header names a field; compared without case, spaces and signs.
+ * Common practice, no source.
+ */
+export const HEADER_WORDS: Record<ImportField, readonly string[]> = {
+  system: [
+    "system",
+    "system code",
+    "system name",
+    "tank",
+    "exhibit",
+    "location",
+    "site code",
+    "body of water",
+  ],
+  point: ["point", "sampling point", "sample point", "sampling location", "position", "station", "tap"],
+  parameter: [
+    "parameter",
+    "parameter code",
+    "analyte",
+    "test",
+    "determinand",
+    "measurement",
+    "variable",
+    "quantity",
+  ],
+  value: ["value", "result", "reading", "measured value", "amount", "concentration"],
+  unit: ["unit", "units", "uom", "unit of measure", "result unit"],
+  moment: [
+    "taken at",
+    "date time",
+    "date and time",
+    "date/time",
+    "datetime",
+    "timestamp",
+    "time stamp",
+    "sampled at",
+    "measured at",
+    "reading time",
+    "date/time taken",
+    "moment",
+  ],
+  date: ["date", "day", "sample date", "date taken", "sampling date", "reading date", "taken on"],
+  time: ["time", "time taken", "sample time", "sampling time", "clock", "time of day", "hour"],
+  method: ["method", "method code", "procedure", "assay"],
+  instrument: [
+    "instrument",
+    "instrument code",
+    "meter",
+    "probe",
+    "sensor",
+    "device",
+    "serial",
+    "serial number",
+  ],
+  note: ["note", "notes", "comment", "comments", "remark", "remarks"],
+  takenBy: [
+    "taken by",
+    "sampled by",
+    "measured by",
+    "read by",
+    "person",
+    "operator",
+    "initials",
+    "sampler",
+    "by",
+  ],
+};
