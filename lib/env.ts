@@ -1,5 +1,7 @@
+import { randomBytes } from "node:crypto";
 import path from "node:path";
 import { z } from "zod";
+import { processSingleton } from "@/lib/process-singleton";
 
 /** A secret that ships in examples or is too short protects nobody. */
 const WEAK_SECRETS = ["secret", "changeme", "change-me", "stillwell", "development", "password"];
@@ -19,7 +21,10 @@ const settingsSchema = z.object({
   NODE_ENV: z.enum(["development", "production", "test"]).default("development"),
   STILLWELL_DATA: z.string().min(1).default("./data"),
   STILLWELL_URL: z.url().default("http://localhost:3000"),
-  STILLWELL_ZONE: z.string().refine(isZone, "is not an IANA time zone such as Europe/London").default("Europe/London"),
+  STILLWELL_ZONE: z
+    .string()
+    .refine(isZone, "is not an IANA time zone such as Europe/London")
+    .default("Europe/London"),
   STILLWELL_DAY_CUT: z
     .string()
     .regex(/^([01]\d|2[0-3]):[0-5]\d$/, "must be a time of day such as 06:00")
@@ -53,7 +58,9 @@ export type Settings = z.infer<typeof settingsSchema> & {
 /** A setting that is missing, weak or unsafe; the message names each. */
 export class SettingsError extends Error {
   constructor(readonly problems: string[]) {
-    super(`Stillwell does not start with these settings:\n${problems.map((line) => `  - ${line}`).join("\n")}`);
+    super(
+      `Stillwell does not start with these settings:\n${problems.map((line) => `  - ${line}`).join("\n")}`,
+    );
     this.name = "SettingsError";
   }
 }
@@ -99,7 +106,8 @@ function unsafeSettings(settings: z.infer<typeof settingsSchema>): string[] {
 
 function secretProblems(secret: string | undefined): string[] {
   if (!secret) return ["NEXTAUTH_SECRET: is missing; make one with `openssl rand -base64 32`"];
-  const isWeak = WEAK_SECRETS.some((weak) => secret.toLowerCase().includes(weak)) || new Set(secret).size < 10;
+  const isWeak =
+    WEAK_SECRETS.some((weak) => secret.toLowerCase().includes(weak)) || new Set(secret).size < 10;
   if (secret.length < 32 || isWeak) {
     return ["NEXTAUTH_SECRET: is too weak; make one with `openssl rand -base64 32` (32 characters or more)"];
   }
@@ -110,8 +118,22 @@ let current: Settings | undefined;
 
 /** The settings of this process. */
 export function settings(): Settings {
-  current ??= readSettings(process.env);
+  current ??= withSecret(readSettings(process.env));
   return current;
+}
+
+/** While developing, a secret of this process will do: whoever restarts it signs in again. Production has refused before. */
+function withSecret(read: Settings): Settings {
+  if (read.NEXTAUTH_SECRET || read.NODE_ENV === "production") return read;
+  return {
+    ...read,
+    NEXTAUTH_SECRET: processSingleton("secret", () => randomBytes(32).toString("base64")),
+  };
+}
+
+/** Tells next-auth, which reads the environment itself, at which address the site is reached. */
+export function tellNextAuth(): void {
+  process.env.NEXTAUTH_URL ||= settings().STILLWELL_URL;
 }
 
 /** Puts other settings in place of the process's own; tests, seeds and command-line tools alone. */

@@ -28,8 +28,18 @@ function refusal(problem: Problem, requestId: string): Response {
 }
 
 /** Turns whatever was thrown into an answer: a Problem as it is, anything else logged and shown as 500 with nothing inside. */
-export function answerFault(cause: unknown, request: Request, requestId: string, actor: Actor | null): Response {
-  const where = { requestId, method: request.method, path: new URL(request.url).pathname, person: actor?.personId ?? null };
+export function answerFault(
+  cause: unknown,
+  request: Request,
+  requestId: string,
+  actor: Actor | null,
+): Response {
+  const where = {
+    requestId,
+    method: request.method,
+    path: new URL(request.url).pathname,
+    person: actor?.personId ?? null,
+  };
   if (cause instanceof Problem) {
     log().info({ ...where, code: cause.code, status: cause.status }, "refused");
     return refusal(cause, requestId);
@@ -39,12 +49,18 @@ export function answerFault(cause: unknown, request: Request, requestId: string,
   const detail = `The fault has been noted as ${requestId}. What you sent was not taken; send it again.`;
   return Response.json(
     { ...body, detail },
-    { status: 500, headers: { ...JSON_HEADERS, "content-type": "application/problem+json", "x-request-id": requestId } },
+    {
+      status: 500,
+      headers: { ...JSON_HEADERS, "content-type": "application/problem+json", "x-request-id": requestId },
+    },
   );
 }
 
 /** The frame of every route: request id, origin, who asks, faults. `open` routes are for people who are not signed in. */
-export function route(perform: (asked: Asked) => Promise<Response>, options: { open?: boolean } = {}): RouteHandler {
+export function route(
+  perform: (asked: Asked) => Promise<Response>,
+  options: { open?: boolean } = {},
+): RouteHandler {
   return async (request, context) => {
     const requestId = randomUUID();
     let actor: Actor | null = null;

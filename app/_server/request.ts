@@ -45,7 +45,8 @@ export async function readBody(request: Request): Promise<Record<string, unknown
   return body as Record<string, unknown>;
 }
 
-const tooLarge = () => new Problem("too-large", "The body is larger than 2 MB; import large tables as a file.");
+const tooLarge = () =>
+  new Problem("too-large", "The body is larger than 2 MB; import large tables as a file.");
 
 /**
  * The address a request came from. Forwarded headers are believed only as far as there are proxies of our own.

@@ -1,7 +1,7 @@
 import "server-only";
-import { decode } from "next-auth/jwt";
 import { cookies } from "next/headers";
 import { forbidden, notFound, redirect } from "next/navigation";
+import { decode } from "next-auth/jwt";
 import { cache } from "react";
 import type { z } from "zod";
 import { database } from "@/db/database";

@@ -15,7 +15,7 @@ export { repeatInvitation } from "./commands/repeat-invitation";
 export { endSession } from "./commands/start-session";
 export { suspendPerson } from "./commands/suspend-person";
 export { findOpenLink } from "./links";
-export { addressesOf, mustBeAnother } from "./people";
+export { addressesOf, findActivePerson, mustBeAnother } from "./people";
 export { getOwnAccount, listDeputies, listPeople, listPersonNames } from "./queries/list-people";
 export { hashPassword } from "./rules/password";
 export { actorOf, findSession, type SessionLookup, touchSession } from "./sessions/actor";

@@ -62,3 +62,8 @@ export function mustBeAnother(actorId: number | null, madeBy: number | null, wha
     throw new Problem("own-work", `You made this ${what} yourself; another person must decide on it.`);
   }
 }
+
+/** An active person by id, or null. */
+export function findActivePerson(db: Orm, personId: number): Person | null {
+  return db.select().from(person).where(and(eq(person.id, personId), eq(person.state, "active"))).get() ?? null;
+}

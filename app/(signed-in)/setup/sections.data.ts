@@ -1,0 +1,52 @@
+import type { Permission } from "@/modules/access";
+import { identityMay } from "@/modules/identity";
+import { notificationsMay } from "@/modules/notifications";
+
+export type SetupSection = {
+  href: string;
+  label: string;
+  /** One sentence: what is set up there. */
+  says: string;
+  /** One of these is needed. */
+  for: readonly Permission[];
+};
+
+export type SetupGroup = { title: string; sections: readonly SetupSection[] };
+
+/** What can be set up, grouped as a person looks for it. A section stands here once its page works. */
+export const SETUP: readonly SetupGroup[] = [
+  {
+    title: "People",
+    sections: [
+      {
+        href: "/setup/people",
+        label: "People",
+        says: "Invite people, give and end roles, say in which areas somebody works, shut somebody out.",
+        for: [identityMay.readPeople],
+      },
+      {
+        href: "/setup/deputies",
+        label: "Deputies",
+        says: "Who stands in for whom, in which role, from which day to which.",
+        for: [identityMay.nameDeputies, identityMay.readPeople],
+      },
+      {
+        href: "/setup/roles",
+        label: "Roles",
+        says: "The table of what each role may do, as the server decides it.",
+        for: [identityMay.listPeople],
+      },
+    ],
+  },
+  {
+    title: "This installation",
+    sections: [
+      {
+        href: "/setup/outbox",
+        label: "Mail",
+        says: "The letters that went out, that wait, and that could not be sent.",
+        for: [notificationsMay.readOutbox],
+      },
+    ],
+  },
+];

@@ -1,0 +1,39 @@
+import type { Crumb } from "@/lib/ui";
+
+/** Words for parts of addresses that are no menu entry; a code stands for itself, a number is left out. */
+const PATH_WORDS: Readonly<Record<string, string>> = {
+  account: "Your account",
+  people: "People",
+  deputies: "Deputies",
+  outbox: "Mail",
+  roles: "Roles",
+};
+
+const isNumber = (part: string): boolean => /^\d+$/.test(part);
+
+function wordsOf(part: string, href: string, entries: readonly { href: string; label: string }[]): string {
+  const entry = entries.find((one) => one.href === href);
+  if (entry) return entry.label;
+  const plain = decodeURIComponent(part);
+  const known = PATH_WORDS[plain];
+  if (known) return known;
+  // Codes such as KELP-01 stay as they are; words of an address begin with a capital.
+  return /[A-Z]/.test(plain) ? plain : plain.charAt(0).toUpperCase() + plain.slice(1).replaceAll("-", " ");
+}
+
+/**
+ * Where is a path, in words? One step a part of the path; the last one that has words is where you are.
+ * @example pathCrumbs("/setup/people/3", [{ href: "/setup", label: "Setup" }])
+ *   // [{ label: "Setup", href: "/setup" }, { label: "People", href: "/setup/people" }]
+ */
+export function pathCrumbs(path: string, entries: readonly { href: string; label: string }[]): Crumb[] {
+  const parts = path.split("/").filter(Boolean);
+  const crumbs = parts.flatMap((part, index) => {
+    if (isNumber(part)) return [];
+    const href = `/${parts.slice(0, index + 1).join("/")}`;
+    return [{ label: wordsOf(part, href, entries), href }];
+  });
+  const last = crumbs.at(-1);
+  if (last?.href !== `/${parts.join("/")}`) return crumbs;
+  return [...crumbs.slice(0, -1), { label: last.label }];
+}
