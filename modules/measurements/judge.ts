@@ -1,4 +1,4 @@
-import { and, asc, desc, eq, gte, lte, ne } from "drizzle-orm";
+import { and, asc, desc, eq, gte, lte, ne, sql } from "drizzle-orm";
 import type { Orm } from "@/db/database";
 import { invariant } from "@/lib/invariant";
 import { unitLabel } from "@/lib/units/factors";
@@ -22,30 +22,26 @@ export type Judged = {
   qualifier: ReadingValue["qualifier"];
   answer: string | null;
   takenAt: number;
+  deliveryId: number | null;
 };
 
-/** Plain values of the same point and parameter in the 24 h up to a moment that may stand for a change. */
+/**
+ * Plain values of the same point and parameter in the 24 h up to a moment that may stand for a change: those that count,
+ * and those that come in the same delivery.
+ */
 export function precedingValues(db: Orm, of: Judged): TimedValue[] {
-  return db
-    .select({
-      id: readingInForce.id,
-      takenAt: readingInForce.takenAt,
-      value: readingInForce.value,
-      qualifier: readingInForce.qualifier,
-    })
-    .from(readingInForce)
-    .where(
-      and(
-        eq(readingInForce.pointId, of.pointId),
-        eq(readingInForce.parameterId, of.parameterId),
-        gte(readingInForce.takenAt, of.takenAt - CHANGE_WINDOW_MS),
-        lte(readingInForce.takenAt, of.takenAt),
-        ne(readingInForce.id, of.id),
-        ne(readingInForce.status, "implausible"),
-      ),
-    )
-    .orderBy(asc(readingInForce.takenAt))
-    .all();
+  const { id, pointId, parameterId, takenAt, deliveryId } = of;
+  return db.all<TimedValue>(sql`
+    select r.id, r.taken_at as "takenAt", r.value, r.qualifier from measurements_reading r
+    left join measurements_delivery d on d.id = r.delivery_id
+    where r.point_id = ${pointId} and r.parameter_id = ${parameterId}
+      and r.taken_at between ${takenAt - CHANGE_WINDOW_MS} and ${takenAt} and r.id <> ${id} and r.voided_at is null
+      and (r.delivery_id is null or r.delivery_id is ${deliveryId}
+        or (d.published_at is not null and d.withdrawn_at is null))
+      and not exists (select 1 from measurements_reading later where later.supersedes_id = r.id)
+      and coalesce((select j.status from measurements_judgement j where j.reading_id = r.id order by j.id desc limit 1), '')
+        <> 'implausible'
+    order by r.taken_at`);
 }
 
 /** Judges one reading by the limits in force when it was taken. Pure decision over what is given; writes nothing. */

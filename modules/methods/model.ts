@@ -55,3 +55,17 @@ export interface ParameterDefinition {
   readonly mayBeNegative: boolean;
   readonly note: string;
 }
+
+/** Whether an instrument may be used. */
+export const INSTRUMENT_STATES = ["in-use", "out-of-use", "retired"] as const;
+export type InstrumentState = (typeof INSTRUMENT_STATES)[number];
+
+/** What a check of an instrument found. "adjusted": found off and put right. */
+export const CHECK_VERDICTS = ["good", "adjusted", "failed"] as const;
+export type CheckVerdict = (typeof CHECK_VERDICTS)[number];
+
+/** A parameter of the facility as other modules see it: its definition with its id. */
+export interface FacilityParameter extends ParameterDefinition {
+  readonly id: number;
+  readonly isRetired: boolean;
+}

@@ -1,4 +1,11 @@
-import { convertByFactor, getUnit, type UnitDefinition, UnitError, unitLabel } from "@/lib/units/factors";
+import {
+  convertByFactor,
+  getUnit,
+  type UnitDefinition,
+  UnitError,
+  type UnitErrorCode,
+  unitLabel,
+} from "@/lib/units/factors";
 import {
   alkalinityMeqPerL,
   alkalinityUmolPerKg,
@@ -22,7 +29,7 @@ export type ConvertedReading =
   | { readonly ok: true; readonly value: number }
   | {
       readonly ok: false;
-      readonly code: "unknown-unit" | "different-kind" | "needs-context" | "not-a-number" | "out-of-range";
+      readonly code: UnitErrorCode;
       readonly sentence: string;
     };
 

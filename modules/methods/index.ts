@@ -1,0 +1,4 @@
+import "server-only";
+
+export { allParameters, findParameterByCode, getParameter } from "./parameters";
+export { toCanonical } from "./rules/to-canonical";
