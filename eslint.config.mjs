@@ -139,6 +139,11 @@ export default defineConfig([
     rules: { "no-console": "off" },
   },
   {
+    name: "stillwell/where there is no React, a name that begins with use is no hook",
+    files: ["tests/support/*.ts", "tests/integration/**", "scripts/**", "db/**", "lib/*.ts"],
+    rules: { "react-hooks/rules-of-hooks": "off" },
+  },
+  {
     name: "stillwell/long by nature",
     files: ["**/*.data.{ts,mjs}", ...TESTS],
     rules: { "max-lines": "off", "max-lines-per-function": "off" },

@@ -2,6 +2,7 @@
 import path from "node:path";
 import { build, buildIsCurrent } from "./build.mjs";
 import { demoSecret, ensureDemoData, ForeignDataError, signInLines } from "./demo-data.mjs";
+import { whenAskedToEnd } from "./ending.mjs";
 import { ensureInstalled, requireNode, root } from "./installed.mjs";
 import { exitCodeOf, portIsFree, spawnServer, stopServer, waitUntilReady } from "./serve.mjs";
 
@@ -55,12 +56,10 @@ const server = spawnServer({
   },
 });
 let stopping = false;
-for (const signal of ["SIGINT", "SIGTERM", "SIGHUP"]) {
-  process.on(signal, () => {
-    stopping = true;
-    void stopServer(server);
-  });
-}
+whenAskedToEnd(() => {
+  stopping = true;
+  void stopServer(server);
+});
 server.once("exit", (code, signal) => process.exit(stopping ? 0 : exitCodeOf(code, signal)));
 
 try {

@@ -2,6 +2,7 @@
 import { spawnSync } from "node:child_process";
 import { existsSync } from "node:fs";
 import path from "node:path";
+import { whenAskedToEnd } from "./ending.mjs";
 import { requireNode, root } from "./installed.mjs";
 import { exitCodeOf, spawnServer, stopServer } from "./serve.mjs";
 
@@ -30,10 +31,8 @@ const server = spawnServer({
   },
 });
 let stopping = false;
-for (const signal of ["SIGINT", "SIGTERM", "SIGHUP"]) {
-  process.on(signal, () => {
-    stopping = true;
-    void stopServer(server);
-  });
-}
+whenAskedToEnd(() => {
+  stopping = true;
+  void stopServer(server);
+});
 server.once("exit", (code, signal) => process.exit(stopping ? 0 : exitCodeOf(code, signal)));

@@ -4,6 +4,7 @@ import { spawn } from "node:child_process";
 import { existsSync, mkdirSync, readFileSync, rmSync } from "node:fs";
 import path from "node:path";
 import { build } from "./build.mjs";
+import { whenAskedToEnd } from "./ending.mjs";
 import { ensureBrowser } from "./find-browser.mjs";
 import { ensureInstalled, requireNode, root } from "./installed.mjs";
 import { exitCodeOf } from "./serve.mjs";
@@ -11,15 +12,18 @@ import { countOne, countPlaywright, countVitest, runStages } from "./stages.mjs"
 
 const REPORTS = path.join(root, "build", "test-reports");
 const STAGE_MS = 30 * 60_000;
+const GRACE_MS = 20_000;
 const NEXT = "node_modules/next/dist/bin/next";
 
 let running;
-for (const signal of ["SIGINT", "SIGTERM", "SIGHUP"]) {
-  process.on(signal, () => {
-    running?.kill(signal);
-    process.exit(exitCodeOf(null, signal));
-  });
-}
+whenAskedToEnd((signal) => {
+  const end = () => process.exit(exitCodeOf(null, signal));
+  if (running === undefined || running.exitCode !== null) end();
+  // At SIGINT a tool first stops what it started itself; one that does not end is ended after 20 s.
+  running.once("exit", end);
+  running.kill("SIGINT");
+  setTimeout(() => running.kill("SIGKILL"), GRACE_MS);
+});
 
 /** Runs a tool in its own process and answers its exit code; one that takes half an hour is ended. */
 function tool(args, env = {}) {

@@ -16,10 +16,14 @@ let server: TestServer | undefined;
 
 /** Starts the built product once for all access tests. */
 export async function setup(project: TestProject): Promise<void> {
-  server = await startTestServer("access");
-  project.provide("serverUrl", server.url);
-  project.provide("serverData", server.dataFolder);
-  project.provide("serverLog", server.logFile);
+  const started = await startTestServer("access");
+  server = started;
+  // A run that is interrupted does not come to teardown.
+  process.once("exit", () => started.child.kill());
+  for (const signal of ["SIGINT", "SIGTERM"] as const) process.once(signal, () => process.exit(1));
+  project.provide("serverUrl", started.url);
+  project.provide("serverData", started.dataFolder);
+  project.provide("serverLog", started.logFile);
 }
 
 export async function teardown(): Promise<void> {

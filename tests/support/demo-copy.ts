@@ -21,9 +21,25 @@ export function demoTemplate(): string {
 export function copyDemoData(title: string): string {
   const runs = path.join(root, "build", "test-data");
   mkdirSync(runs, { recursive: true });
+  for (const old of readdirSync(runs)) clearIfOver(path.join(runs, old));
   const folder = mkdtempSync(path.join(runs, `${title}-`));
   cpSync(demoTemplate(), folder, { recursive: true });
   return folder;
+}
+
+/** Removes what an interrupted run left behind: a folder whose server no longer lives. */
+function clearIfOver(folder: string): void {
+  const pidFile = path.join(folder, "server.pid");
+  if (!existsSync(pidFile) || isAlive(Number(readFileSync(pidFile, "utf8")))) return;
+  rmSync(folder, { recursive: true, force: true });
+}
+
+function isAlive(pid: number): boolean {
+  try {
+    return process.kill(pid, 0);
+  } catch {
+    return false;
+  }
 }
 
 /** A person of the demonstration, as db/seed/sign-ins.json lists them. */
