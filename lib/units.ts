@@ -12,6 +12,7 @@ export {
   normaliseUnitText,
   type UnitDefinition,
   UnitError,
+  type UnitErrorCode,
   type UnitMatch,
   unitLabel,
 } from "./units/factors";

@@ -2,10 +2,17 @@ import { type Dimension, type NeededContext, UNIT_TABLE, type UnitDefinition } f
 
 export type { Dimension, NeededContext, UnitDefinition };
 
+export type UnitErrorCode =
+  | "unknown-unit"
+  | "different-kind"
+  | "needs-context"
+  | "not-a-number"
+  | "out-of-range";
+
 /** Why a unit could not be used. `code` for machines, `message` is the sentence for people. */
 export class UnitError extends RangeError {
   constructor(
-    readonly code: "unknown-unit" | "different-kind" | "needs-context" | "not-a-number",
+    readonly code: UnitErrorCode,
     message: string,
   ) {
     super(message);
