@@ -1,11 +1,4 @@
-export {
-  ALKALINITY_UNIT_MG_PER_L_CACO3,
-  type AlkalinityUnit,
-  alkalinityMeqPerL,
-  alkalinityUmolPerKg,
-  CLARK_DEGREE_MG_PER_L,
-  convertAlkalinity,
-} from "./chemistry/alkalinity-units";
+export { alkalinityMeqPerL, alkalinityUmolPerKg } from "./chemistry/alkalinity-per-kg";
 export {
   type ConcentrationBasis,
   defaultAmmoniaFormula,
@@ -35,18 +28,9 @@ export {
 } from "./chemistry/dissociation";
 export {
   type Atoms,
-  CALCIUM_CARBONATE_G_PER_MOL,
-  CALCIUM_OXIDE_G_PER_MOL,
   molarMassGPerMol,
   WATER_G_PER_MOL,
 } from "./chemistry/molar-mass";
-export {
-  type AmountUnit,
-  convertNutrient,
-  type Nutrient,
-  type NutrientBasis,
-  nutrientFactor,
-} from "./chemistry/nutrient-basis";
 export {
   convertPH,
   PH_SCALE_RANGE,
@@ -143,9 +127,9 @@ export {
 export { DENSITY_RANGE, densityKgPerM3, salinityFromDensity } from "./water/density";
 export { FREEZING_RANGE, freezingPointC } from "./water/freezing";
 export {
-  _KPA,
   ALTITUDE_RANGE,
   barometricPressureKPa,
+  STANDARD_ATMOSPHERE_KPA,
   totalGasPressurePercent,
 } from "./water/gas-pressure";
 export { HEAT_CAPACITY_RANGE, specificHeatJPerKgK } from "./water/heat-capacity";

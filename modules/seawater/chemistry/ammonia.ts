@@ -1,7 +1,11 @@
 import { requireNotNegative, requireWithin, type ValidRange } from "../validity";
 import { AMMONIA_FORMULA_SCALES, AMMONIA_RANGE, type AmmoniaFormula, ammoniumPKa } from "./ammonium-pka";
-import { nutrientFactor } from "./nutrient-basis";
+import { ATOMIC_WEIGHTS } from "./atomic-weights.data";
+import { molarMassGPerMol } from "./molar-mass";
 import { convertPH, type PHScale } from "./ph-scale";
+
+/** Mass of ammonia over the mass of the nitrogen in it, 1.2159. */
+const NH3_PER_NITROGEN = molarMassGPerMol({ N: 1, H: 3 }) / ATOMIC_WEIGHTS.N;
 
 /** Whether the concentrations behind pH and pKa are per kilogram of water (as printed) or of seawater. */
 export type ConcentrationBasis = "mol/kg-water" | "mol/kg-seawater";
@@ -107,5 +111,5 @@ export function unionizedFromFraction(input: { totalAmmoniaMgNPerL: number; frac
   requireNotNegative("totalAmmoniaMgNPerL", input.totalAmmoniaMgNPerL);
   requireWithin("fraction", input.fraction, { min: 0, max: 1, unit: "" }, "a share");
   const unionizedMgNPerL = input.totalAmmoniaMgNPerL * input.fraction;
-  return { unionizedMgNPerL, unionizedMgNH3PerL: unionizedMgNPerL * nutrientFactor("ammonia") };
+  return { unionizedMgNPerL, unionizedMgNH3PerL: unionizedMgNPerL * NH3_PER_NITROGEN };
 }

@@ -1,7 +1,7 @@
 import { ZERO_CELSIUS_K } from "../temperature-scale";
 import { requireNotNegative, requirePositive, requireWithin, type ValidRange } from "../validity";
 import { densityKgPerM3 } from "../water/density";
-import { alkalinityUmolPerKg } from "./alkalinity-units";
+import { alkalinityUmolPerKg } from "./alkalinity-per-kg";
 import { ATOMIC_WEIGHTS } from "./atomic-weights.data";
 import { lnSeawaterConstant, type SeawaterConstant } from "./dissociation";
 import { convertPH, type PHScale } from "./ph-scale";

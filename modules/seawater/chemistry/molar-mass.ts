@@ -18,9 +18,3 @@ export function molarMassGPerMol(atoms: Atoms): number {
 
 /** g/mol of water. */
 export const WATER_G_PER_MOL = molarMassGPerMol({ H: 2, O: 1 });
-
-/** g/mol of calcium carbonate, the base of hardness and alkalinity figures. */
-export const CALCIUM_CARBONATE_G_PER_MOL = molarMassGPerMol({ Ca: 1, C: 1, O: 3 });
-
-/** g/mol of calcium oxide, the base of German degrees. */
-export const CALCIUM_OXIDE_G_PER_MOL = molarMassGPerMol({ Ca: 1, O: 1 });

@@ -45,78 +45,79 @@ export function residual(columns: readonly Column[], b: Column, x: Column): numb
 
 const MOST_ROUNDS = 500;
 
+/** A column helps only when it takes away more than this share of the target. */
+const HELPS = 1e-12;
+
+interface Fit {
+  readonly x: readonly number[];
+  /** columns with something in them */
+  readonly used: readonly number[];
+}
+
 /**
- * Solves min |A x − b| with no negative x. The answer meets the Karush-Kuhn-Tucker conditions: no salt that is left out
- * would help. Throws RangeError for columns of unequal length; a programmer's error otherwise never arises.
- * Source: Lawson and Hanson 1974, Solving Least Squares Problems, chapter 23. Checked: SciPy's nnls.
+ * Solves min |A x − b| with no negative x. The answer meets the Karush-Kuhn-Tucker conditions: no column that is left out
+ * would help. Throws RangeError for columns of unequal length.
+ * Source: Lawson and Hanson 1974, Solving Least Squares Problems, chapter 23. Checked: SciPy 1.17.1 nnls.
  * @example nonNegativeLeastSquares([[1, 0], [0, 1]], [2, -1]) // => [2, 0]
  */
 export function nonNegativeLeastSquares(columns: readonly Column[], b: Column): number[] {
   if (columns.some((column) => column.length !== b.length)) {
     throw new RangeError("Every column must be as long as the target.");
   }
-  const scale = norm(b) || 1;
-  let x: number[] = columns.map(() => 0);
-  const used = new Set<number>();
+  let fit: Fit = { x: columns.map(() => 0), used: [] };
   for (let round = 0; round < MOST_ROUNDS; round++) {
-    const rest = residual(columns, b, x);
-    const candidates = columns
-      .map((column, j) => ({ j, gain: dot(column, rest) / (norm(column) || 1) }))
-      .filter(({ j, gain }) => !used.has(j) && gain > 1e-12 * scale)
-      .sort((one, other) => other.gain - one.gain);
-    const next = candidates.map(({ j }) => enter(columns, b, x, used, j)).find((tried) => tried !== null);
-    if (!next) return x;
-    x = next;
+    const better = improved(columns, b, fit);
+    if (!better) break;
+    fit = better;
   }
-  return x;
+  return [...fit.x];
+}
+
+/** Lets in the column that helps most; null when none does. */
+function improved(columns: readonly Column[], b: Column, fit: Fit): Fit | null {
+  const rest = residual(columns, b, fit.x);
+  const candidates = columns
+    .map((column, j) => ({ j, gain: dot(column, rest) / (norm(column) || 1) }))
+    .filter(({ j, gain }) => !fit.used.includes(j) && gain > HELPS * norm(b))
+    .sort((one, other) => other.gain - one.gain);
+  for (const { j } of candidates) {
+    const entered = enter(columns, b, fit, j);
+    if (entered) return entered;
+  }
+  return null;
+}
+
+const solveOn = (columns: readonly Column[], b: Column, used: readonly number[]) =>
+  leastSquares(
+    used.map((j) => columns[j]!),
+    b,
+  );
+
+/** Share of the way to its goal that a value can go before it is zero. */
+function roomFor(value: number, goal: number): number {
+  if (goal > 0) return Number.POSITIVE_INFINITY;
+  return value === 0 ? 0 : value / (value - goal);
 }
 
 /** Lets one column in and drops those that it drives to zero; null when it cannot come in at all. */
-function enter(
-  columns: readonly Column[],
-  b: Column,
-  start: readonly number[],
-  used: Set<number>,
-  entering: number,
-): number[] | null {
-  const passive = [...used, entering];
-  let solved = leastSquares(
-    passive.map((j) => columns[j]!),
-    b,
-  );
+function enter(columns: readonly Column[], b: Column, fit: Fit, entering: number): Fit | null {
+  const x = [...fit.x];
+  let used = [...fit.used, entering];
+  let solved = solveOn(columns, b, used);
   if (!solved || solved[solved.length - 1]! <= 0) return null;
-  const x = [...start];
   while (solved.some((value) => value <= 0)) {
-    const target: readonly number[] = solved;
-    const step = Math.min(
-      ...passive.map((j, i) => (target[i]! <= 0 ? x[j]! / (x[j]! - target[i]!) : Number.POSITIVE_INFINITY)),
-    );
-    passive.forEach((j, i) => {
-      x[j] = x[j]! + step * (target[i]! - x[j]!);
+    const goal: readonly number[] = solved;
+    const room = used.map((j, i) => roomFor(x[j]!, goal[i]!));
+    const step = Math.min(...room);
+    used.forEach((j, i) => {
+      x[j] = room[i] === step ? 0 : x[j]! + step * (goal[i]! - x[j]!);
     });
-    const leaving = passive.filter(
-      (j, i) => target[i]! <= 0 && x[j]! <= 1e-15 * Math.abs(target[i]!) + 1e-300,
-    );
-    const worst = leaving.length > 0 ? leaving : [smallest(passive, target, x)];
-    for (const j of worst) {
-      x[j] = 0;
-      passive.splice(passive.indexOf(j), 1);
-    }
-    solved =
-      leastSquares(
-        passive.map((j) => columns[j]!),
-        b,
-      ) ?? [];
+    used = used.filter((_, i) => room[i] !== step);
+    solved = solveOn(columns, b, used);
+    if (!solved) return null;
   }
-  used.clear();
-  passive.forEach((j, i) => {
-    used.add(j);
+  used.forEach((j, i) => {
     x[j] = solved[i]!;
   });
-  return x;
-}
-
-/** Of the columns driven below zero, the one that came nearest to it. */
-function smallest(passive: readonly number[], target: readonly number[], x: readonly number[]): number {
-  return passive.filter((_, i) => target[i]! <= 0).reduce((least, j) => (x[j]! < x[least]! ? j : least));
+  return { x, used };
 }

@@ -44,7 +44,7 @@ export interface OxygenConditions {
  * Units: °C on ITS-90, psu, kPa; answer in mg/L. Domain: OXYGEN_RANGE, else RangeError.
  * Source: Benson and Krause 1984, Limnol. Oceanogr. 29, 620-632, eq. 32, with the pressure terms of Standard Methods
  * 4500-O (also USGS tables). Checked: Benson and Krause (14.621 at 0 °C, 9.870 at 16 °C, 7.305 at 32 °C, fresh).
- * @example oxygenSaturationMgPerL({ temperatureC: 20, salinityPsu: 35 }) // => 7.396
+ * @example oxygenSaturationMgPerL({ temperatureC: 20, salinityPsu: 35 }) // => 7.395
  */
 export function oxygenSaturationMgPerL(input: OxygenConditions): number {
   const { temperatureC, salinityPsu, pressureKPa = STANDARD_ATMOSPHERE_KPA } = input;
@@ -75,7 +75,7 @@ export function oxygenSaturationPercent(input: OxygenConditions & { oxygenMgPerL
  * How many mg/L of oxygen is a given percentage of saturation? (Inverse of oxygenSaturationPercent.)
  *
  * Units: %, °C on ITS-90, psu, kPa; answer in mg/L. Domain: OXYGEN_RANGE, else RangeError. Source: as above.
- * @example oxygenFromSaturationPercentMgPerL({ saturationPercent: 100, temperatureC: 20, salinityPsu: 35 }) // => 7.396
+ * @example oxygenFromSaturationPercentMgPerL({ saturationPercent: 100, temperatureC: 20, salinityPsu: 35 }) // => 7.395
  */
 export function oxygenFromSaturationPercentMgPerL(
   input: OxygenConditions & { saturationPercent: number },
