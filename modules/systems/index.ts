@@ -23,4 +23,4 @@ export { listSystems } from "./queries/list-systems";
 export { listWaitingVolumes, type WaitingVolume } from "./queries/list-waiting-volumes";
 export { volumeOf } from "./queries/volume-of";
 export { getPoint, getSystemById, pointsById } from "./records";
-export { pointDirectory } from "./schema";
+export { pointDirectory } from "./views";

@@ -48,6 +48,8 @@ const areaFields = {
   biosecurityLevel: whole(0, 4, "The biosecurity level is a whole number from 0 to 4."),
   walkingOrder: order,
 };
+/** What a form asks about an area, a system, a point, equipment; new and existing alike. */
+export const areaFormInput = z.strictObject(areaFields);
 /** Without a site, the only one there is. */
 export const createAreaInput = z.strictObject({ ...areaFields, siteId: id.nullable().default(null) });
 export const editAreaInput = z.strictObject({ ...areaFields, areaId: id });
@@ -62,19 +64,27 @@ const systemFields = {
   walkingOrder: order,
   notes,
 };
+const workingState = z.enum(["in-service", "out-of-service"], "To retire a system, use “Retire”.");
+export const systemFormInput = z.strictObject({ ...systemFields, state: workingState });
 export const createSystemInput = z.strictObject({
   ...systemFields,
-  state: z.enum(["in-service", "out-of-service"]).default("in-service"),
+  state: workingState.default("in-service"),
   /** The point that readings are taken at unless another is named. */
   defaultPoint: z.strictObject(pointFields).default({ code: "SURFACE", name: "Surface", kind: "surface" }),
 });
 export const editSystemInput = z.strictObject({
   ...systemFields,
   systemId: id,
-  state: z.enum(["in-service", "out-of-service"], "To retire a system, use “Retire”."),
+  state: workingState,
 });
+export const reasonFormInput = z.strictObject({ reason });
 export const retireSystemInput = z.strictObject({ systemId: id, reason });
 
+export const pointFormInput = z.strictObject({
+  ...pointFields,
+  isDefault: z.boolean(),
+  isInUse: z.boolean(),
+});
 export const addPointInput = z.strictObject({
   ...pointFields,
   systemId: id,
@@ -94,6 +104,7 @@ const equipmentFields = {
   state: z.enum(SYSTEM_STATES).default("in-service"),
   notes,
 };
+export const equipmentFormInput = z.strictObject(equipmentFields);
 export const addEquipmentInput = z.strictObject({ ...equipmentFields, systemId: id });
 export const editEquipmentInput = z.strictObject({ ...equipmentFields, equipmentId: id });
 
@@ -192,8 +203,7 @@ export const approveVolumeInput = z.strictObject({
 });
 export const declineVolumeInput = z.strictObject({ determinationId: id, reason });
 
-export const setOperatingLevelInput = z.strictObject({
-  systemId: id,
+const levelFields = {
   /** Height of the water above (+) or below (−) the level of the volume of record. */
   levelOffset: decimal(true, "The level"),
   lengthUnit: lengthUnit.default("cm"),
@@ -201,7 +211,9 @@ export const setOperatingLevelInput = z.strictObject({
   /** All systems that this one shares its water with; who is left out is parted. */
   joinedWith: z.array(id).max(50).default([]),
   reason,
-});
+};
+export const levelFormInput = z.strictObject(levelFields);
+export const setOperatingLevelInput = z.strictObject({ ...levelFields, systemId: id });
 
 export const listAreasInput = z.strictObject({});
 export const listSystemsInput = z.strictObject({
