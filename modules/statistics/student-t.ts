@@ -82,7 +82,7 @@ function upperQuantile(tail: number, df: number): number {
  * distribution of the denominator.
  *
  * Source: definition T = (Z + delta) / (chi / sqrt(df)). Checked: df 4, delta 4.06727564116139 gives 0.05 at 2.1318.
- * @example noncentralTCdf(0, 5, 0) // => 0.5
+ * @example noncentralTCdf(0, 5, 0).toFixed(12) // => "0.500000000000"
  */
 export function noncentralTCdf(t: number, df: number, delta: number): number {
   requirePositive(df, "Degrees of freedom");
