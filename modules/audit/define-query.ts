@@ -1,5 +1,4 @@
-import { inArray, type SQL, sql } from "drizzle-orm";
-import type { SQLiteColumn } from "drizzle-orm/sqlite-core";
+import { type SQL, type SQLWrapper, sql } from "drizzle-orm";
 import type { z } from "zod";
 import type { Orm } from "@/db/database";
 import { Problem } from "@/lib/problem";
@@ -15,7 +14,7 @@ export type QueryContext = {
   /** The areas whose rows the actor may see; null means all. */
   readonly areaIds: readonly number[] | null;
   /** SQL that keeps the rows of the areas that the actor may see. */
-  inMyAreas(column: SQLiteColumn): SQL;
+  inMyAreas(column: SQLWrapper): SQL;
 };
 
 export type Query<S extends z.ZodType = z.ZodType, R = unknown> = {
@@ -46,7 +45,7 @@ export function ask<S extends z.ZodType, R>(
   const ctx: QueryContext = {
     ...from,
     areaIds,
-    inMyAreas: (column) => (areaIds === null ? sql`true` : inArray(column, [...areaIds])),
+    inMyAreas: (column) => (areaIds === null ? sql`true` : sql`${column} in ${[...areaIds]}`),
   };
   return query.run(ctx, parseInput(query.input, rawInput));
 }

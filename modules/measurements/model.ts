@@ -1,4 +1,4 @@
-import type { ParameterKind, PlausibleBounds } from "@/modules/methods/model";
+import type { FacilityParameter, ParameterKind, PlausibleBounds } from "@/modules/methods/model";
 
 export type { ParameterKind, PlausibleBounds };
 
@@ -171,4 +171,39 @@ export interface ReadingAnswer {
 /** A value that is off by so much is confirmed by a person, or measured again. */
 export function needsConfirmation(status: Status): boolean {
   return status === "out" || status === "implausible";
+}
+
+/** One of the newest readings of a point and parameter. */
+export interface RecentReading {
+  readonly id: number;
+  readonly takenAt: number;
+  readonly takenBy: number;
+  readonly value: number | null;
+  readonly qualifier: Qualifier;
+  readonly answer: string | null;
+  readonly typedText: string;
+  readonly status: Status;
+  readonly side: Side | null;
+  readonly sentence: string;
+}
+
+/** One thing that is read at a point: with its limits now and its newest readings, newest first. */
+export interface WatchRow {
+  readonly pointId: number;
+  readonly pointName: string;
+  readonly isDefaultPoint: boolean;
+  readonly systemId: number;
+  readonly systemCode: string;
+  readonly systemName: string;
+  readonly systemState: string;
+  readonly areaId: number;
+  readonly areaName: string;
+  readonly parameter: FacilityParameter;
+  /** The unit in which it is typed and shown unless the person prefers another. */
+  readonly unit: string | null;
+  readonly everyDays: number | null;
+  readonly methodId: number | null;
+  readonly instrumentId: number | null;
+  readonly limits: LimitsInForce;
+  readonly recent: readonly RecentReading[];
 }
