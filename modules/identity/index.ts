@@ -16,7 +16,13 @@ export { endSession } from "./commands/start-session";
 export { suspendPerson } from "./commands/suspend-person";
 export { findOpenLink } from "./links";
 export { addressesOf, findActivePerson, mustBeAnother } from "./people";
-export { getOwnAccount, listDeputies, listPeople, listPersonNames } from "./queries/list-people";
+export {
+  getOwnAccount,
+  getPersonRow,
+  listDeputies,
+  listPeople,
+  listPersonNames,
+} from "./queries/list-people";
 export { hashPassword } from "./rules/password";
 export { actorOf, findSession, type SessionLookup, touchSession } from "./sessions/actor";
 export { askForReset, changeOwnPassword, confirmPassword, setPasswordByLink } from "./sessions/passwords";

@@ -33,7 +33,7 @@ export const invitePersonInput = z.strictObject({
   name,
   email,
   roles: z.array(role).max(ROLES.length).default([]),
-  areaIds: z.array(z.number().int().positive()).default([]),
+  areaIds: z.array(id).max(200).default([]),
 });
 
 export const editPersonInput = z.strictObject({ personId: id, name, email });
@@ -48,7 +48,7 @@ export const endRoleInput = z.strictObject({
 
 export const bindAreasInput = z.strictObject({
   personId: id,
-  areaIds: z.array(z.number().int().positive()).max(200),
+  areaIds: z.array(id).max(200),
 });
 
 export const suspendPersonInput = z.strictObject({

@@ -56,6 +56,12 @@ export function findOpenLink(db: Orm, token: string, at: number) {
   return db
     .select()
     .from(oneTimeLink)
-    .where(and(eq(oneTimeLink.tokenHash, secretHash(token)), isNull(oneTimeLink.usedAt), gt(oneTimeLink.expiresAt, at)))
+    .where(
+      and(
+        eq(oneTimeLink.tokenHash, secretHash(token)),
+        isNull(oneTimeLink.usedAt),
+        gt(oneTimeLink.expiresAt, at),
+      ),
+    )
     .get();
 }

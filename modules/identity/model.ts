@@ -15,6 +15,7 @@ export type PersonRow = {
   name: string;
   email: string;
   state: PersonState;
+  suspendedReason: string | null;
   roles: Role[];
   waitingRoles: { grantId: number; role: Role; grantedBy: number | null }[];
   areaIds: number[];

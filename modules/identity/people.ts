@@ -65,5 +65,11 @@ export function mustBeAnother(actorId: number | null, madeBy: number | null, wha
 
 /** An active person by id, or null. */
 export function findActivePerson(db: Orm, personId: number): Person | null {
-  return db.select().from(person).where(and(eq(person.id, personId), eq(person.state, "active"))).get() ?? null;
+  return (
+    db
+      .select()
+      .from(person)
+      .where(and(eq(person.id, personId), eq(person.state, "active")))
+      .get() ?? null
+  );
 }

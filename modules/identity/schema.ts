@@ -56,7 +56,9 @@ export const areaBinding = sqliteTable(
     endedAt: integer("ended_at"),
   },
   (table) => [
-    uniqueIndex("identity_area_binding_open").on(table.personId, table.areaId).where(sql`${table.endedAt} is null`),
+    uniqueIndex("identity_area_binding_open")
+      .on(table.personId, table.areaId)
+      .where(sql`${table.endedAt} is null`),
   ],
 );
 

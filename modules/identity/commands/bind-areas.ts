@@ -27,7 +27,11 @@ export const bindAreas = defineCommand({
     }
     return {
       result: { personId, areaIds },
-      event: { kind: identityEvents.areasBound, subject: { type: "person", id: personId }, payload: { areaIds } },
+      event: {
+        kind: identityEvents.areasBound,
+        subject: { type: "person", id: personId },
+        payload: { areaIds },
+      },
     };
   },
 });

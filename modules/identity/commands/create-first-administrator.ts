@@ -28,14 +28,22 @@ export const createFirstAdministrator = defineCommand({
       .where(and(eq(person.state, "active"), eq(roleGrant.role, "admin"), eq(roleGrant.state, "active")))
       .get();
     if (existing) throw new Problem("conflict", "There is an administrator already, who can invite others.");
-    const added = ctx.db.insert(person).values({ name, email, state: "active", createdAt: ctx.at }).returning().get();
+    const added = ctx.db
+      .insert(person)
+      .values({ name, email, state: "active", createdAt: ctx.at })
+      .returning()
+      .get();
     ctx.db.insert(credential).values({ personId: added.id, passwordHash, changedAt: ctx.at }).run();
     for (const role of roles) {
       ctx.db.insert(roleGrant).values({ personId: added.id, role, state: "active", grantedAt: ctx.at }).run();
     }
     return {
       result: { personId: added.id },
-      event: { kind: identityEvents.invited, subject: { type: "person", id: added.id }, payload: { first: true, roles } },
+      event: {
+        kind: identityEvents.invited,
+        subject: { type: "person", id: added.id },
+        payload: { first: true, roles },
+      },
     };
   },
 });

@@ -21,6 +21,9 @@ export const editPerson = defineCommand({
       .get();
     if (taken) throw invalidField("/email", "taken", "Somebody else has this e-mail address.");
     ctx.db.update(person).set({ name, email }).where(eq(person.id, personId)).run();
-    return { result: { personId }, event: { kind: identityEvents.edited, subject: { type: "person", id: personId } } };
+    return {
+      result: { personId },
+      event: { kind: identityEvents.edited, subject: { type: "person", id: personId } },
+    };
   },
 });

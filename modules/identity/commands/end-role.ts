@@ -15,7 +15,13 @@ export const endRole = defineCommand({
     const grant = ctx.db
       .select()
       .from(roleGrant)
-      .where(and(eq(roleGrant.personId, personId), eq(roleGrant.role, role), inArray(roleGrant.state, ["waiting", "active"])))
+      .where(
+        and(
+          eq(roleGrant.personId, personId),
+          eq(roleGrant.role, role),
+          inArray(roleGrant.state, ["waiting", "active"]),
+        ),
+      )
       .get();
     if (!grant) throw notFound("such role");
     if (role === "admin" && grant.state === "active") mustLeaveAnAdministrator(ctx.db, personId);
@@ -26,7 +32,12 @@ export const endRole = defineCommand({
       .run();
     return {
       result: { personId, role },
-      event: { kind: identityEvents.roleEnded, subject: { type: "person", id: personId }, payload: { role }, reason },
+      event: {
+        kind: identityEvents.roleEnded,
+        subject: { type: "person", id: personId },
+        payload: { role },
+        reason,
+      },
     };
   },
 });
@@ -40,6 +51,9 @@ export function mustLeaveAnAdministrator(db: Parameters<typeof endRole.run>[0]["
     .where(and(eq(person.state, "active"), eq(roleGrant.role, "admin"), eq(roleGrant.state, "active")))
     .all();
   if (admins.every((admin) => admin.id === leaving)) {
-    throw new Problem("conflict", "This is the last active administrator; give the role to another person first.");
+    throw new Problem(
+      "conflict",
+      "This is the last active administrator; give the role to another person first.",
+    );
   }
 }

@@ -18,9 +18,19 @@ export const grantRole = defineCommand({
     const open = ctx.db
       .select()
       .from(roleGrant)
-      .where(and(eq(roleGrant.personId, personId), eq(roleGrant.role, role), inArray(roleGrant.state, ["waiting", "active"])))
+      .where(
+        and(
+          eq(roleGrant.personId, personId),
+          eq(roleGrant.role, role),
+          inArray(roleGrant.state, ["waiting", "active"]),
+        ),
+      )
       .get();
-    if (open) throw new Problem("conflict", `This person has the role ${ROLE_LABELS[role]} already, or it waits for approval.`);
+    if (open)
+      throw new Problem(
+        "conflict",
+        `This person has the role ${ROLE_LABELS[role]} already, or it waits for approval.`,
+      );
     const state = personId === ctx.actor.personId ? "waiting" : "active";
     const grant = ctx.db
       .insert(roleGrant)
@@ -29,7 +39,11 @@ export const grantRole = defineCommand({
       .get();
     return {
       result: { grantId: grant.id, state },
-      event: { kind: identityEvents.roleGranted, subject: { type: "person", id: personId }, payload: { role, state } },
+      event: {
+        kind: identityEvents.roleGranted,
+        subject: { type: "person", id: personId },
+        payload: { role, state },
+      },
     };
   },
 });

@@ -13,7 +13,11 @@ export const invitePerson = defineCommand({
   permission: identityMay.managePeople,
   input: invitePersonInput,
   run(ctx, input) {
-    const taken = ctx.db.select({ id: person.id }).from(person).where(sql`lower(${person.email}) = lower(${input.email})`).get();
+    const taken = ctx.db
+      .select({ id: person.id })
+      .from(person)
+      .where(sql`lower(${person.email}) = lower(${input.email})`)
+      .get();
     if (taken) throw invalidField("/email", "taken", "Somebody with this e-mail address is here already.");
     const added = ctx.db
       .insert(person)
@@ -23,7 +27,13 @@ export const invitePerson = defineCommand({
     for (const role of new Set(input.roles)) {
       ctx.db
         .insert(roleGrant)
-        .values({ personId: added.id, role, state: "active", grantedBy: ctx.actor.personId, grantedAt: ctx.at })
+        .values({
+          personId: added.id,
+          role,
+          state: "active",
+          grantedBy: ctx.actor.personId,
+          grantedAt: ctx.at,
+        })
         .run();
     }
     for (const areaId of new Set(input.areaIds)) {

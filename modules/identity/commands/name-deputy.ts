@@ -30,7 +30,11 @@ export const nameDeputy = defineCommand({
       .get();
     return {
       result: { deputyshipId: named.id },
-      event: { kind: identityEvents.deputyNamed, subject: { type: "person", id: input.personId }, payload: { ...input } },
+      event: {
+        kind: identityEvents.deputyNamed,
+        subject: { type: "person", id: input.personId },
+        payload: { ...input },
+      },
     };
   },
 });

@@ -13,10 +13,18 @@ export const preferUnits = defineCommand({
   input: preferUnitsInput,
   run(ctx, { units }) {
     invariant(ctx.actor.personId !== null, "a person has preferences");
-    ctx.db.update(person).set({ preferredUnits: JSON.stringify(units) }).where(eq(person.id, ctx.actor.personId)).run();
+    ctx.db
+      .update(person)
+      .set({ preferredUnits: JSON.stringify(units) })
+      .where(eq(person.id, ctx.actor.personId))
+      .run();
     return {
       result: { units },
-      event: { kind: identityEvents.unitsPreferred, subject: { type: "person", id: ctx.actor.personId }, payload: { units } },
+      event: {
+        kind: identityEvents.unitsPreferred,
+        subject: { type: "person", id: ctx.actor.personId },
+        payload: { units },
+      },
     };
   },
 });

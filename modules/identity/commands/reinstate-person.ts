@@ -13,10 +13,14 @@ export const reinstatePerson = defineCommand({
   permission: identityMay.managePeople,
   input: reinstatePersonInput,
   run(ctx, { personId }) {
-    if (getPerson(ctx.db, personId).state !== "suspended") throw new Problem("conflict", "This person is not suspended.");
+    if (getPerson(ctx.db, personId).state !== "suspended")
+      throw new Problem("conflict", "This person is not suspended.");
     const hasPassword = ctx.db.select().from(credential).where(eq(credential.personId, personId)).get();
     const state = hasPassword ? "active" : "invited";
     ctx.db.update(person).set({ state, suspendedReason: null }).where(eq(person.id, personId)).run();
-    return { result: { personId, state }, event: { kind: identityEvents.reinstated, subject: { type: "person", id: personId } } };
+    return {
+      result: { personId, state },
+      event: { kind: identityEvents.reinstated, subject: { type: "person", id: personId } },
+    };
   },
 });

@@ -15,6 +15,9 @@ export const repeatInvitation = defineCommand({
     const invited = getPerson(ctx.db, personId);
     if (invited.state !== "invited") throw new Problem("conflict", "This person has come in already.");
     sendOneTimeLink(ctx, invited, "invitation");
-    return { result: { personId }, event: { kind: identityEvents.inviteRepeated, subject: { type: "person", id: personId } } };
+    return {
+      result: { personId },
+      event: { kind: identityEvents.inviteRepeated, subject: { type: "person", id: personId } },
+    };
   },
 });

@@ -2,12 +2,12 @@ import { and, eq, isNull } from "drizzle-orm";
 import { z } from "zod";
 import { invariant } from "@/lib/invariant";
 import { Problem } from "@/lib/problem";
+import type { CommandContext } from "@/modules/audit";
 import { defineCommand } from "@/modules/audit";
 import { identityMay } from "../abilities";
 import { identityEvents } from "../events";
 import { findOpenLink } from "../links";
 import { credential, oneTimeLink, person, session } from "../schema";
-import type { CommandContext } from "@/modules/audit";
 
 function store(ctx: CommandContext, personId: number, passwordHash: string): void {
   const values = { passwordHash, changedAt: ctx.at };
@@ -42,12 +42,17 @@ export const setPassword = defineCommand({
       throw new Problem("not-found", "This link has been used or is too old. Ask for a new one.");
     }
     ctx.db.update(oneTimeLink).set({ usedAt: ctx.at }).where(eq(oneTimeLink.tokenHash, link.tokenHash)).run();
-    if (found.state === "invited") ctx.db.update(person).set({ state: "active" }).where(eq(person.id, found.id)).run();
+    if (found.state === "invited")
+      ctx.db.update(person).set({ state: "active" }).where(eq(person.id, found.id)).run();
     store(ctx, found.id, passwordHash);
     endOtherSessions(ctx, found.id);
     return {
       result: { personId: found.id, email: found.email },
-      event: { kind: identityEvents.passwordSet, subject: { type: "person", id: found.id }, payload: { purpose: link.purpose } },
+      event: {
+        kind: identityEvents.passwordSet,
+        subject: { type: "person", id: found.id },
+        payload: { purpose: link.purpose },
+      },
     };
   },
 });

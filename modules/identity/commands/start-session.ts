@@ -30,7 +30,10 @@ export const endSession = defineCommand({
   permission: identityMay.ownAccount,
   input: z.strictObject({}),
   run(ctx) {
-    invariant(ctx.actor.personId !== null && ctx.actor.sessionId !== null, "a person with a session signs out");
+    invariant(
+      ctx.actor.personId !== null && ctx.actor.sessionId !== null,
+      "a person with a session signs out",
+    );
     ctx.db
       .update(session)
       .set({ endedAt: ctx.at })

@@ -18,7 +18,11 @@ export const suspendPerson = defineCommand({
     if (personId === ctx.actor.personId) throw new Problem("conflict", "You cannot suspend yourself.");
     if (found.state === "suspended") throw new Problem("conflict", "This person is suspended already.");
     mustLeaveAnAdministrator(ctx.db, personId);
-    ctx.db.update(person).set({ state: "suspended", suspendedReason: reason }).where(eq(person.id, personId)).run();
+    ctx.db
+      .update(person)
+      .set({ state: "suspended", suspendedReason: reason })
+      .where(eq(person.id, personId))
+      .run();
     ctx.db
       .update(session)
       .set({ endedAt: ctx.at })

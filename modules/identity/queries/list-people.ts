@@ -4,6 +4,7 @@ import type { Orm } from "@/db/database";
 import { defineQuery } from "@/modules/audit";
 import { identityMay } from "../abilities";
 import type { PersonRow } from "../model";
+import { getPerson } from "../people";
 import { areaBinding, deputy, person, roleGrant } from "../schema";
 
 function toRow(db: Orm, row: typeof person.$inferSelect): PersonRow {
@@ -22,6 +23,7 @@ function toRow(db: Orm, row: typeof person.$inferSelect): PersonRow {
     name: row.name,
     email: row.email,
     state: row.state,
+    suspendedReason: row.suspendedReason,
     roles: grants.filter((grant) => grant.state === "active").map((grant) => grant.role),
     waitingRoles: grants
       .filter((grant) => grant.state === "waiting")
@@ -38,6 +40,16 @@ export const listPeople = defineQuery({
   run(ctx): PersonRow[] {
     const rows = ctx.db.select().from(person).orderBy(asc(person.name)).all();
     return rows.map((row) => toRow(ctx.db, row));
+  },
+});
+
+/** One person with roles and areas. @throws Problem `not-found` */
+export const getPersonRow = defineQuery({
+  name: "getPersonRow",
+  permission: identityMay.readPeople,
+  input: z.strictObject({ personId: z.coerce.number().int().positive() }),
+  run(ctx, { personId }): PersonRow {
+    return toRow(ctx.db, getPerson(ctx.db, personId));
   },
 });
 
@@ -74,6 +86,10 @@ export const getOwnAccount = defineQuery({
     if (ctx.actor.personId === null) return null;
     const row = ctx.db.select().from(person).where(eq(person.id, ctx.actor.personId)).get();
     if (!row) return null;
-    return { name: row.name, email: row.email, preferredUnits: JSON.parse(row.preferredUnits) as Record<string, string> };
+    return {
+      name: row.name,
+      email: row.email,
+      preferredUnits: JSON.parse(row.preferredUnits) as Record<string, string>,
+    };
   },
 });

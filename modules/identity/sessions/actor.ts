@@ -9,7 +9,12 @@ import { secretHash } from "../rules/secret";
 import { person, session } from "../schema";
 
 /** A person as actor at a moment: own roles and those held as a deputy on that day. Null where not active. */
-export function actorOf(db: Orm, personId: number, at: number, sessionId: string | null = null): Actor | null {
+export function actorOf(
+  db: Orm,
+  personId: number,
+  at: number,
+  sessionId: string | null = null,
+): Actor | null {
   const found = db.select().from(person).where(eq(person.id, personId)).get();
   if (found?.state !== "active") return null;
   const on = epochToLocal(at, settings().STILLWELL_ZONE).on;

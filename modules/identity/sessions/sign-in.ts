@@ -10,7 +10,9 @@ import { afterFailure, MAX_FAILURES, mayTry } from "../rules/throttle";
 import { credential, person, throttle } from "../schema";
 import { actorOf } from "./actor";
 
-export type SignIn = { kind: "signed-in"; secret: string; personId: number; name: string } | { kind: "refused" | "throttled" };
+export type SignIn =
+  | { kind: "signed-in"; secret: string; personId: number; name: string }
+  | { kind: "refused" | "throttled" };
 
 const throttleKeys = (email: string, address: string) => ({
   account: `account:${secretHash(email.trim().toLowerCase())}`,
@@ -29,8 +31,24 @@ function countFailure(db: Database, keys: string[], at: number): void {
     for (const key of keys) {
       const state = orm.select().from(throttle).where(eq(throttle.key, key)).get();
       const next = afterFailure(state, at);
-      orm.insert(throttle).values({ key, ...next }).onConflictDoUpdate({ target: throttle.key, set: next }).run();
+      orm
+        .insert(throttle)
+        .values({ key, ...next })
+        .onConflictDoUpdate({ target: throttle.key, set: next })
+        .run();
     }
+  });
+}
+
+/** A try that was right counts for nothing: the account's tries are forgotten, the address gets its one back. */
+function forgiveTry(db: Database, keys: { account: string; address: string }): void {
+  upkeep(db, (orm) => {
+    orm.delete(throttle).where(eq(throttle.key, keys.account)).run();
+    orm
+      .update(throttle)
+      .set({ failures: sql`max(0, ${throttle.failures} - 1)` })
+      .where(eq(throttle.key, keys.address))
+      .run();
   });
 }
 
@@ -65,6 +83,6 @@ export async function signIn(
   }
   const secret = newSecret();
   runCommand(db, actor, startSession, { sessionId: secretHash(secret), address: given.address }, { clock });
-  upkeep(db, (orm) => orm.delete(throttle).where(eq(throttle.key, keys.account)).run());
+  forgiveTry(db, keys);
   return { kind: "signed-in", secret, personId: account.id, name: actor.name };
 }

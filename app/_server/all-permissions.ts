@@ -1,0 +1,20 @@
+import "server-only";
+import type { Permission } from "@/modules/access";
+import { auditMay } from "@/modules/audit";
+import { identityMay } from "@/modules/identity";
+import { notificationsMay } from "@/modules/notifications";
+
+/** Every module's permissions under the words that people know the module by. A module with abilities stands here
+ * (tests/architecture/permissions.test.ts sees to it). */
+export const PERMISSION_TABLES: readonly {
+  title: string;
+  permissions: Readonly<Record<string, Permission>>;
+}[] = [
+  { title: "People and accounts", permissions: identityMay },
+  { title: "Mail", permissions: notificationsMay },
+  { title: "History", permissions: auditMay },
+];
+
+export const ALL_PERMISSIONS: readonly Permission[] = PERMISSION_TABLES.flatMap((table) =>
+  Object.values(table.permissions),
+);
