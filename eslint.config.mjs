@@ -77,6 +77,7 @@ export default defineConfig([
       eqeqeq: ["error", "always", { null: "ignore" }],
       "no-console": ["error", { allow: ["error"] }],
       "import/no-anonymous-default-export": "off",
+      "react/no-unescaped-entities": "off",
     },
   },
   {

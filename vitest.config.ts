@@ -28,7 +28,13 @@ export default defineConfig({
       },
       {
         ...shared,
-        test: { name: "unit-dom", environment: "jsdom", include: beside("tsx"), exclude, setupFiles },
+        test: {
+          name: "unit-dom",
+          environment: "jsdom",
+          include: beside("tsx"),
+          exclude,
+          setupFiles: [...setupFiles, at("./tests/support/dom.ts")],
+        },
       },
       {
         ...shared,
