@@ -1,5 +1,6 @@
 import type { FileDelimiter } from "@/modules/imports/model";
-import { RecordSplitter, RefusedFile, type TextRecord } from "@/modules/imports/rules/split-records";
+import { RefusedFile } from "@/modules/imports/rules/refused-file";
+import { RecordSplitter, type TextRecord } from "@/modules/imports/rules/split-records";
 
 /** In this order when nothing else decides. */
 export const DELIMITERS: readonly FileDelimiter[] = [",", ";", "\t", "|"];

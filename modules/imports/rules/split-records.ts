@@ -1,4 +1,5 @@
-import { type FileRefusal, IMPORT_LIMITS, type RowProblemCode } from "@/modules/imports/model";
+import { IMPORT_LIMITS, type RowProblemCode } from "@/modules/imports/model";
+import { type RefusedFile, refuseFile } from "@/modules/imports/rules/refused-file";
 
 /** One record of a text file, still in one piece. `line` is the line on which it begins, from 1. */
 export type TextRecord = {
@@ -9,24 +10,6 @@ export type TextRecord = {
   /** What RFC 4180 does not allow and therefore must not be repaired silently. */
   fault: Extract<RowProblemCode, "stray-quote" | "text-after-quote"> | null;
 };
-
-/** A file that cannot be split into records; thrown by `RecordSplitter`. */
-export class RefusedFile extends Error {
-  constructor(readonly refusal: FileRefusal) {
-    super(refusal.reason);
-    this.name = "RefusedFile";
-  }
-}
-
-/** The refusal of a whole file as an error to throw. */
-export function refuseFile(
-  code: FileRefusal["code"],
-  reason: string,
-  mend: string,
-  line: number | null = null,
-): RefusedFile {
-  return new RefusedFile({ code, reason, mend, line });
-}
 
 const QUOTE = 0x22;
 const CR = 0x0d;
