@@ -38,7 +38,10 @@ export interface RadioButtonsProps
   label?: string;
 }
 
-/** One of a few, as buttons big enough for a wet thumb. Arrow keys move between them. Use inside `<Field group>`. */
+/**
+ * One of a few, as buttons big enough for a wet thumb. Arrow keys move between them. Use inside `<Field group>`.
+ * With `register`, nothing picked comes as null: an optional pick is `.nullish()` in its schema.
+ */
 export function RadioButtons({
   options,
   value,

@@ -33,7 +33,16 @@ export function FormError({ problem, labels = {} }: FormErrorProps) {
                 {path === "" ? (
                   error.detail
                 ) : (
-                  <a href={`#${fieldId(path)}`} className="link inline-block min-h-6">
+                  <a
+                    href={`#${fieldId(path)}`}
+                    className="link inline-block min-h-6"
+                    onClick={(event) => {
+                      const field = document.getElementById(fieldId(path));
+                      if (field === null) return;
+                      event.preventDefault();
+                      field.focus();
+                    }}
+                  >
                     {label ? `${label}: ` : ""}
                     {error.detail}
                   </a>

@@ -61,6 +61,7 @@ export { ThemeChoice, type ThemeChoiceProps } from "./theme-choice";
 export { TimeText, type TimeTextProps } from "./time-text";
 export { agoText, type TimeParts, timeText } from "./time-words";
 export { type Crumb, TopBar, type TopBarProps } from "./top-bar";
+export { type ActOptions, useAct } from "./use-act";
 export { type ProblemForm, type ProblemFormOptions, useProblemForm } from "./use-problem-form";
 export { WellStrip, type WellStripProps } from "./well-strip";
 export { type WellStripInput, type WellStripScale, wellStripScale } from "./well-strip-scale";

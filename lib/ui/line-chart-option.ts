@@ -23,9 +23,7 @@ export function chartOption(
   width: number,
 ): EChartsCoreOption {
   const narrow = width < 520;
-  const [from, to] = timeRange(data);
   const [low, high] = valueRange(data);
-  const axisText = { fontFamily: colours.mono, fontSize: 12, color: colours["ink-3"] };
   return {
     animation: false,
     textStyle: { fontFamily: colours.sans },
@@ -37,35 +35,8 @@ export function chartOption(
       outerBoundsMode: "same",
       outerBoundsContain: "axisLabel",
     },
-    xAxis: {
-      type: "time",
-      min: from,
-      max: to,
-      axisLabel: {
-        ...axisText,
-        hideOverlap: true,
-        formatter: (at: number) =>
-          timeText(at, words.zone, to - from > 3 * DAY_MS ? "weekday" : "day-time").replace(
-            /^\w+ /,
-            to - from > 3 * DAY_MS ? "" : "$&",
-          ),
-      },
-      axisLine: { lineStyle: { color: colours.edge } },
-      axisTick: { lineStyle: { color: colours.edge } },
-      splitLine: { show: false },
-    },
-    yAxis: {
-      type: "value",
-      min: low,
-      max: high,
-      axisLabel: {
-        ...axisText,
-        showMinLabel: false,
-        showMaxLabel: false,
-        formatter: (y: number) => numberText(y, words.decimals),
-      },
-      splitLine: { lineStyle: { color: colours.rule, width: 1 } },
-    },
+    xAxis: timeAxis(data, words, colours),
+    yAxis: valueAxis(low, high, words, colours),
     tooltip: tooltip(words, colours),
     dataZoom: zooms(colours),
     series: [
@@ -77,6 +48,46 @@ export function chartOption(
       flagSeries(shown, colours),
       ...(narrow ? [] : [labelSeries(data, words, colours)]),
     ],
+  };
+}
+
+const axisText = (colours: ChartPalette) => ({
+  fontFamily: colours.mono,
+  fontSize: 12,
+  color: colours["ink-3"],
+});
+
+/** Days under a long stretch, times under a short one; always in the facility's zone. */
+function timeAxis(data: ChartData, words: ChartWords, colours: ChartPalette): object {
+  const [from, to] = timeRange(data);
+  const formatter = (at: number) => {
+    const [day = "", time = ""] = timeText(at, words.zone, "day-time").split(", ");
+    const short = day.replace(/ \d{4}$/, "");
+    return to - from > 3 * DAY_MS ? short : `${time}\n${short}`;
+  };
+  return {
+    type: "time",
+    min: from,
+    max: to,
+    axisLabel: { ...axisText(colours), hideOverlap: true, formatter },
+    axisLine: { lineStyle: { color: colours.edge } },
+    axisTick: { lineStyle: { color: colours.edge } },
+    splitLine: { show: false },
+  };
+}
+
+function valueAxis(min: number, max: number, words: ChartWords, colours: ChartPalette): object {
+  return {
+    type: "value",
+    min,
+    max,
+    axisLabel: {
+      ...axisText(colours),
+      showMinLabel: false,
+      showMaxLabel: false,
+      formatter: (y: number) => numberText(y, words.decimals),
+    },
+    splitLine: { lineStyle: { color: colours.rule, width: 1 } },
   };
 }
 

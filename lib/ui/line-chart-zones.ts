@@ -53,7 +53,7 @@ export function bandSeries({ band = [] }: ChartData, colours: ChartPalette): obj
           : []),
       ];
     });
-    return { type: "group", children } as ReturnType<CustomSeriesRenderItem>;
+    return { type: "group", $mergeChildren: false, children } as ReturnType<CustomSeriesRenderItem>;
   });
 }
 
@@ -83,7 +83,7 @@ export function controlSeries({ control = [] }: ChartData, colours: ChartPalette
             ],
       ),
     );
-    return { type: "group", children } as ReturnType<CustomSeriesRenderItem>;
+    return { type: "group", $mergeChildren: false, children } as ReturnType<CustomSeriesRenderItem>;
   });
 }
 
@@ -121,7 +121,7 @@ export function markSeries({ marks = [] }: ChartData, colours: ChartPalette): ob
         };
         return row < 0 ? [rule] : [rule, label];
       });
-      return { type: "group", children } as ReturnType<CustomSeriesRenderItem>;
+      return { type: "group", $mergeChildren: false, children } as ReturnType<CustomSeriesRenderItem>;
     },
     false,
   );
@@ -165,7 +165,7 @@ export function labelSeries(
           font: `12px ${colours.sans}`,
         },
       }));
-      return { type: "group", children } as ReturnType<CustomSeriesRenderItem>;
+      return { type: "group", $mergeChildren: false, children } as ReturnType<CustomSeriesRenderItem>;
     },
     false,
   );

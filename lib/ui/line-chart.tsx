@@ -20,17 +20,10 @@ import {
   useRef,
   useState,
 } from "react";
-import { keepExtremes } from "./downsample";
-import {
-  type ChartData,
-  type ChartWords,
-  chartText,
-  isTelling,
-  pointText,
-  timeRange,
-} from "./line-chart-model";
+import { type ChartData, type ChartWords, chartText, pointText } from "./line-chart-model";
 import { chartOption } from "./line-chart-option";
 import { CHART_TOKENS, type ChartPalette } from "./line-chart-palette";
+import { nextStep, panBy, showPoint, visiblePoints, zoomBy } from "./line-chart-window";
 
 registerECharts([
   EChartsLine,
@@ -84,18 +77,15 @@ export function LineChart(props: LineChartProps) {
   const helpId = useId();
   useImperativeHandle(ref, () => ({ toPng: () => toPng(chart.current) }), [chart]);
 
-  const zoom = useCallback((factor: number) => zoomBy(chart.current, factor), [chart]);
+  const zoom = (factor: number) => zoomBy(chart.current, factor);
   const onKeyDown = (event: KeyboardEvent) => {
     const way = { ArrowLeft: -1, ArrowRight: 1 }[event.key];
     if (way !== undefined && event.shiftKey) panBy(chart.current, way * 0.2);
     else if (way !== undefined) {
-      step.current = Math.min(
-        points.length - 1,
-        Math.max(0, step.current < 0 ? points.length - 1 : step.current + way),
-      );
+      step.current = nextStep(points, step.current, way);
       const point = points[step.current];
       if (point !== undefined) setSpoken(pointText(point, words));
-      showPoint(chart.current, point?.at);
+      showPoint(chart.current, data, point?.at);
     } else if (event.key === "+" || event.key === "=") zoom(0.5);
     else if (event.key === "-" || event.key === "−") zoom(2);
     else if (event.key === "0" || event.key === "Home") zoom(Number.POSITIVE_INFINITY);
@@ -122,6 +112,7 @@ export function LineChart(props: LineChartProps) {
       <p aria-live="polite" className="sr-only">
         {spoken}
       </p>
+      <LineKey band={(band?.length ?? 0) > 0} control={(control?.length ?? 0) > 0} />
       <figcaption className="mt-1 -ml-[0.7rem] flex flex-wrap items-center gap-x-1 gap-y-1">
         <button
           type="button"
@@ -151,6 +142,32 @@ export function LineChart(props: LineChartProps) {
         )}
       </figcaption>
     </figure>
+  );
+}
+
+/** On narrow screens the lines have no names beside them; this says which is which. */
+function LineKey({ band, control }: { band: boolean; control: boolean }) {
+  if (!band && !control) return null;
+  return (
+    <p className="flex flex-wrap gap-x-5 text-sm text-ink-2 sm:hidden" aria-hidden="true">
+      {band && (
+        <span className="inline-flex items-center gap-2">
+          <svg width="26" height="10">
+            <path d="M0 1H26V9H0Z" className="fill-band" />
+            <path d="M0 1H26M0 9H26" className="stroke-ink-2" strokeWidth="1.3" />
+          </svg>
+          tolerance
+        </span>
+      )}
+      {control && (
+        <span className="inline-flex items-center gap-2">
+          <svg width="26" height="4">
+            <path d="M0 2H26" className="stroke-water" strokeWidth="1.5" strokeDasharray="7 4" />
+          </svg>
+          control lines
+        </span>
+      )}
+    </p>
   );
 }
 
@@ -200,54 +217,6 @@ function useChart(place: React.RefObject<HTMLDivElement | null>, data: ChartData
     draw();
   }, [draw, data, words]);
   return chart;
-}
-
-interface ZoomState {
-  start: number;
-  end: number;
-}
-
-function zoomState(chart: EChartsType): ZoomState {
-  const option = chart.getOption() as { dataZoom?: Partial<ZoomState>[] } | undefined;
-  const found = option?.dataZoom?.[0];
-  return { start: found?.start ?? 0, end: found?.end ?? 100 };
-}
-
-/** The points of the present window and one beyond each side, thinned to the width. */
-function visiblePoints(chart: EChartsType, data: ChartData) {
-  const [from, to] = timeRange(data);
-  const { start, end } = zoomState(chart);
-  const left = from + ((to - from) * start) / 100;
-  const right = from + ((to - from) * end) / 100;
-  const { points } = data;
-  let first = points.findIndex((p) => p.at >= left);
-  if (first < 0) first = points.length;
-  let last = points.findLastIndex((p) => p.at <= right);
-  first = Math.max(0, first - 1);
-  last = Math.min(points.length - 1, last + 1);
-  const buckets = Math.max(50, Math.floor(chart.getWidth() / 3));
-  return keepExtremes(points.slice(first, last + 1), { buckets, mustKeep: isTelling });
-}
-
-function zoomBy(chart: EChartsType | null, factor: number): void {
-  if (chart === null) return;
-  const { start, end } = zoomState(chart);
-  const half = Math.min(50, Math.max(0.25, ((end - start) / 2) * factor));
-  const middle = Math.min(100 - half, Math.max(half, (start + end) / 2));
-  chart.dispatchAction({ type: "dataZoom", start: middle - half, end: middle + half });
-}
-
-function panBy(chart: EChartsType | null, share: number): void {
-  if (chart === null) return;
-  const { start, end } = zoomState(chart);
-  const move = Math.min(100 - end, Math.max(-start, (end - start) * share));
-  chart.dispatchAction({ type: "dataZoom", start: start + move, end: end + move });
-}
-
-function showPoint(chart: EChartsType | null, at: number | undefined): void {
-  if (chart === null || at === undefined) return;
-  const [x] = chart.convertToPixel({ gridIndex: 0 }, [at, 0]);
-  chart.dispatchAction({ type: "showTip", x, y: 40 });
 }
 
 function toPng(chart: EChartsType | null): string | null {

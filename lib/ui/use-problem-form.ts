@@ -53,7 +53,7 @@ export function useProblemForm<Input extends FieldValues, Output = Input>({
   const [problem, setProblem] = useState<ApiProblem | NetworkProblem | null>(null);
   const key = useRef<string | null>(null);
 
-  const submit = form.handleSubmit(async (values) => {
+  const sendOnce = async (values: Output) => {
     key.current ??= crypto.randomUUID();
     setProblem(null);
     try {
@@ -66,7 +66,8 @@ export function useProblemForm<Input extends FieldValues, Output = Input>({
       setProblem(error);
       if (error instanceof ApiProblem) placeErrors(form, error);
     }
-  });
+  };
+  const submit = (event?: React.BaseSyntheticEvent) => form.handleSubmit(sendOnce)(event);
 
   const { errors } = form.formState;
   const errorOf = useCallback((path: FieldPath<Input>) => messageAt(errors, path), [errors]);
