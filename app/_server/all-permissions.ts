@@ -3,6 +3,7 @@ import type { Permission } from "@/modules/access";
 import { auditMay } from "@/modules/audit";
 import { identityMay } from "@/modules/identity";
 import { notificationsMay } from "@/modules/notifications";
+import { systemsMay } from "@/modules/systems";
 
 /** Every module's permissions under the words that people know the module by. A module with abilities stands here
  * (tests/architecture/permissions.test.ts sees to it). */
@@ -10,6 +11,7 @@ export const PERMISSION_TABLES: readonly {
   title: string;
   permissions: Readonly<Record<string, Permission>>;
 }[] = [
+  { title: "Areas and systems", permissions: systemsMay },
   { title: "People and accounts", permissions: identityMay },
   { title: "Mail", permissions: notificationsMay },
   { title: "History", permissions: auditMay },

@@ -9,7 +9,7 @@ import { systemClock } from "@/lib/clock";
 import { settings } from "@/lib/env";
 import { log } from "@/lib/log";
 import { Problem } from "@/lib/problem";
-import type { Actor } from "@/modules/access";
+import { type Actor, may, type Permission } from "@/modules/access";
 import { ask, type Query, upkeep } from "@/modules/audit";
 import { findSession, touchSession } from "@/modules/identity";
 import { SESSION_COOKIE, SESSION_COOKIE_SECURE } from "./cookies";
@@ -62,6 +62,14 @@ export const pageActor = cache(async (): Promise<Actor> => {
     throw cause;
   }
 });
+
+/** A page that needs a permission before it asks anything (a form); shows the page that says so where there is none. */
+export async function mustMay(permission: Permission): Promise<Actor> {
+  const actor = await pageActor();
+  if (may(actor, permission)) return actor;
+  log().info({ person: actor.personId, permission: permission.code }, "page refused");
+  forbidden();
+}
 
 /** Asks a question for a page: not allowed shows the page that says so, not found the one that says that. */
 export async function askPage<S extends z.ZodType, R>(what: Query<S, R>, input: z.input<S>): Promise<R> {

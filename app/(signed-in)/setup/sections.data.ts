@@ -1,6 +1,7 @@
 import type { Permission } from "@/modules/access";
 import { identityMay } from "@/modules/identity";
 import { notificationsMay } from "@/modules/notifications";
+import { systemsMay } from "@/modules/systems";
 
 export type SetupSection = {
   href: string;
@@ -35,6 +36,23 @@ export const SETUP: readonly SetupGroup[] = [
         label: "Roles",
         says: "The table of what each role may do, as the server decides it.",
         for: [identityMay.listPeople],
+      },
+    ],
+  },
+  {
+    title: "The facility",
+    sections: [
+      {
+        href: "/setup/areas",
+        label: "Areas",
+        says: "Galleries and buildings, their biosecurity level and the order in which they are walked.",
+        for: [systemsMay.read],
+      },
+      {
+        href: "/setup/systems",
+        label: "Systems",
+        says: "Bodies of water with their points, their equipment and how much they hold.",
+        for: [systemsMay.read],
       },
     ],
   },
