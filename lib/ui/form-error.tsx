@@ -35,7 +35,7 @@ export function FormError({ problem, labels = {} }: FormErrorProps) {
                 ) : (
                   <a
                     href={`#${fieldId(path)}`}
-                    className="link inline-block min-h-6"
+                    className="link inline py-0.5"
                     onClick={(event) => {
                       const field = document.getElementById(fieldId(path));
                       if (field === null) return;
