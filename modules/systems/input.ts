@@ -195,12 +195,13 @@ export const proposeVolumeInput = z.discriminatedUnion("method", [
   }),
 ]);
 
-export const approveVolumeInput = z.strictObject({
-  determinationId: id,
-  reason: z.string().trim().max(500, "Keep the reason under 500 characters.").default(""),
+const approvalFields = {
+  reason: z.string().trim().max(500, "Keep the remark under 500 characters.").default(""),
   /** True after a person has been shown that the new volume contradicts the volume of record. */
   acceptsDisagreement: z.boolean().default(false),
-});
+};
+export const approvalFormInput = z.strictObject(approvalFields);
+export const approveVolumeInput = z.strictObject({ ...approvalFields, determinationId: id });
 export const declineVolumeInput = z.strictObject({ determinationId: id, reason });
 
 const levelFields = {

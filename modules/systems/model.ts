@@ -1,5 +1,13 @@
 /** Words and shapes of the systems module: no I/O, no framework; safe for the server, the client and files. */
 
+export {
+  EQUIPMENT_KIND_WORDS,
+  POINT_KIND_WORDS,
+  SYSTEM_KIND_WORDS,
+  SYSTEM_STATE_WORDS,
+  WATER_TYPE_WORDS,
+} from "./words.data";
+
 export const SYSTEM_KINDS = ["exhibit", "holding", "quarantine", "reservoir", "mixing-tank"] as const;
 export type SystemKind = (typeof SYSTEM_KINDS)[number];
 
@@ -45,54 +53,6 @@ export type PointKind = (typeof POINT_KINDS)[number];
 /** 0 = no restriction beyond clean hands; 4 = strict isolation. The facility writes what each level asks for. */
 export const BIOSECURITY_LEVELS = [0, 1, 2, 3, 4] as const;
 export type BiosecurityLevel = (typeof BIOSECURITY_LEVELS)[number];
-
-/** The codes above as words on screen. */
-export const SYSTEM_KIND_WORDS: Readonly<Record<SystemKind, string>> = {
-  exhibit: "exhibit",
-  holding: "holding",
-  quarantine: "quarantine",
-  reservoir: "reservoir",
-  "mixing-tank": "mixing tank",
-};
-export const WATER_TYPE_WORDS: Readonly<Record<WaterType, string>> = {
-  seawater: "seawater",
-  brackish: "brackish water",
-  fresh: "fresh water",
-};
-export const SYSTEM_STATE_WORDS: Readonly<Record<SystemState, string>> = {
-  "in-service": "in service",
-  "out-of-service": "out of service",
-  retired: "retired",
-};
-export const EQUIPMENT_KIND_WORDS: Readonly<Record<EquipmentKind, string>> = {
-  pump: "pump",
-  filter: "filter",
-  skimmer: "skimmer",
-  "ozone-generator": "ozone generator",
-  "contact-chamber": "contact chamber",
-  uv: "UV steriliser",
-  heater: "heater",
-  chiller: "chiller",
-  sump: "sump",
-  biofilter: "biofilter",
-  "degassing-tower": "degassing tower",
-  aerator: "aerator",
-  "dosing-unit": "dosing unit",
-  probe: "probe",
-  other: "other",
-};
-export const POINT_KIND_WORDS: Readonly<Record<PointKind, string>> = {
-  surface: "surface",
-  "mid-water": "mid-water",
-  bottom: "bottom",
-  inlet: "inlet",
-  outlet: "outlet",
-  "filter-outlet": "filter outlet",
-  "contact-chamber": "ozone contact chamber",
-  sump: "sump",
-  "return-line": "return line",
-  other: "other",
-};
 
 /** A quantity with its standard uncertainty (one standard deviation, GUM 2.3.1) in the same unit. */
 export type Measured = { value: number; standardUncertainty: number };

@@ -1,4 +1,4 @@
-import { eq, sql } from "drizzle-orm";
+import { sql } from "drizzle-orm";
 import { index, integer, real, sqliteTable, sqliteView, text, uniqueIndex } from "drizzle-orm/sqlite-core";
 import {
   DETERMINATION_METHODS,
@@ -173,25 +173,24 @@ export const join = sqliteTable(
  * Points with their system and area in one row: how other modules read this one (through the door), to name a point and to
  * keep to the areas that a person may see.
  */
-export const pointDirectory = sqliteView("systems_point_directory").as((qb) =>
-  qb
-    .select({
-      pointId: sql<number>`${point.id}`.as("point_id"),
-      pointCode: sql<string>`${point.code}`.as("point_code"),
-      pointName: sql<string>`${point.name}`.as("point_name"),
-      isDefaultPoint: sql<number>`${point.isDefault}`.as("is_default_point"),
-      isPointInUse: sql<number>`${point.isInUse}`.as("is_point_in_use"),
-      systemId: sql<number>`${system.id}`.as("system_id"),
-      systemCode: sql<string>`${system.code}`.as("system_code"),
-      systemName: sql<string>`${system.name}`.as("system_name"),
-      systemState: sql<string>`${system.state}`.as("system_state"),
-      systemOrder: sql<number>`${system.walkingOrder}`.as("system_order"),
-      areaId: sql<number>`${area.id}`.as("area_id"),
-      areaCode: sql<string>`${area.code}`.as("area_code"),
-      areaName: sql<string>`${area.name}`.as("area_name"),
-      areaOrder: sql<number>`${area.walkingOrder}`.as("area_order"),
-    })
-    .from(point)
-    .innerJoin(system, eq(system.id, point.systemId))
-    .innerJoin(area, eq(area.id, system.areaId)),
-);
+export const pointDirectory = sqliteView("systems_point_directory", {
+  pointId: integer("point_id").notNull(),
+  pointCode: text("point_code").notNull(),
+  pointName: text("point_name").notNull(),
+  isDefaultPoint: integer("is_default_point", { mode: "boolean" }).notNull(),
+  isPointInUse: integer("is_point_in_use", { mode: "boolean" }).notNull(),
+  systemId: integer("system_id").notNull(),
+  systemCode: text("system_code").notNull(),
+  systemName: text("system_name").notNull(),
+  systemState: text("system_state", { enum: SYSTEM_STATES }).notNull(),
+  systemOrder: integer("system_order").notNull(),
+  areaId: integer("area_id").notNull(),
+  areaCode: text("area_code").notNull(),
+  areaName: text("area_name").notNull(),
+  areaOrder: integer("area_order").notNull(),
+}).as(sql`
+  select p.id as point_id, p.code as point_code, p.name as point_name, p.is_default as is_default_point,
+    p.is_in_use as is_point_in_use, s.id as system_id, s.code as system_code, s.name as system_name,
+    s.state as system_state, s.walking_order as system_order, a.id as area_id, a.code as area_code,
+    a.name as area_name, a.walking_order as area_order
+  from systems_point p join systems_system s on s.id = p.system_id join systems_area a on a.id = s.area_id`);

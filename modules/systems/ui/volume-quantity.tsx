@@ -1,0 +1,17 @@
+import { numberText, Quantity } from "@/lib/ui";
+import type { Measured, VolumeUnit } from "../model";
+import { shownVolume } from "./volume-text";
+
+/** A volume with its expanded uncertainty (k = 2), in the reader's unit. */
+export function VolumeQuantity({ volumeL, unit }: { volumeL: Measured | null; unit: VolumeUnit }) {
+  if (volumeL === null) return <Quantity value={null} decimals={0} />;
+  const { value, expanded, decimals } = shownVolume(volumeL, unit);
+  return (
+    <span className="whitespace-nowrap">
+      <Quantity value={value} decimals={decimals} unit={unit} />
+      <span className="ml-2 text-sm font-normal text-ink-3">
+        {expanded === 0 ? "no uncertainty given" : `± ${numberText(expanded, decimals)} (k = 2)`}
+      </span>
+    </span>
+  );
+}
