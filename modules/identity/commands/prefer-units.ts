@@ -1,5 +1,7 @@
 import { eq } from "drizzle-orm";
 import { invariant } from "@/lib/invariant";
+import { invalidField } from "@/lib/problem";
+import { findUnit } from "@/lib/units";
 import { defineCommand } from "@/modules/audit";
 import { identityMay } from "../abilities";
 import { identityEvents } from "../events";
@@ -13,6 +15,10 @@ export const preferUnits = defineCommand({
   input: preferUnitsInput,
   run(ctx, { units }) {
     invariant(ctx.actor.personId !== null, "a person has preferences");
+    for (const [dimension, code] of Object.entries(units)) {
+      if (findUnit(code)?.dimension === dimension) continue;
+      throw invalidField(`/units/${dimension}`, "unknown-unit", `“${code}” is not a unit of ${dimension}.`);
+    }
     ctx.db
       .update(person)
       .set({ preferredUnits: JSON.stringify(units) })
