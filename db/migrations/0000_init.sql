@@ -348,6 +348,19 @@ CREATE TABLE `notifications_mail` (
 );
 --> statement-breakpoint
 CREATE INDEX `notifications_mail_queued` ON `notifications_mail` (`queued_at`);--> statement-breakpoint
+CREATE TABLE `rounds_day_review` (
+	`id` integer PRIMARY KEY NOT NULL,
+	`area_id` integer NOT NULL,
+	`on_day` text NOT NULL,
+	`outcome` text NOT NULL,
+	`comment` text,
+	`content_hash` text NOT NULL,
+	`signature_id` integer NOT NULL,
+	`reviewed_by` integer NOT NULL,
+	`reviewed_at` integer NOT NULL
+);
+--> statement-breakpoint
+CREATE INDEX `rounds_day_review_sheet` ON `rounds_day_review` (`area_id`,`on_day`,`id`);--> statement-breakpoint
 CREATE TABLE `signoff_signature` (
 	`id` integer PRIMARY KEY NOT NULL,
 	`person_id` integer NOT NULL,
@@ -473,5 +486,26 @@ CREATE TABLE `systems_volume_determination` (
 --> statement-breakpoint
 CREATE INDEX `systems_volume_of_record` ON `systems_volume_determination` (`system_id`,`status`,`effective_from_at`);--> statement-breakpoint
 CREATE INDEX `systems_volume_waiting` ON `systems_volume_determination` (`status`);--> statement-breakpoint
-CREATE VIEW `measurements_reading_in_force` AS select "measurements_reading"."id" as "id", "measurements_reading"."uuid" as "uuid", "measurements_reading"."point_id" as "point_id", "measurements_reading"."parameter_id" as "parameter_id", "measurements_reading"."typed_text" as "typed_text", "measurements_reading"."typed_unit" as "typed_unit", "measurements_reading"."value" as "value", "measurements_reading"."qualifier" as "qualifier", "measurements_reading"."answer" as "answer", "measurements_reading"."taken_at" as "taken_at", "measurements_reading"."entered_at" as "entered_at", "measurements_reading"."taken_by" as "taken_by", "measurements_reading"."entered_by" as "entered_by", "measurements_reading"."method_id" as "method_id", "measurements_reading"."instrument_id" as "instrument_id", "measurements_reading"."source" as "source", "measurements_reading"."source_ref" as "source_ref", "measurements_reading"."delivery_id" as "delivery_id", "measurements_reading"."note" as "note", "measurements_reading"."supersedes_id" as "supersedes_id", "measurements_reading"."correction_reason" as "correction_reason", "measurements_reading"."confirmed_at" as "confirmed_at", "measurements_reading"."confirmed_by" as "confirmed_by", "measurements_judgement"."id" as "judgement_id", coalesce("measurements_judgement"."status", 'none') as "status", "measurements_judgement"."side" as "side", coalesce("measurements_judgement"."sentence", '') as "sentence", "measurements_judgement"."limit_version_id" as "limit_version_id" from "measurements_reading" left join "measurements_judgement" on "measurements_judgement"."id" = (select max(newest.id) from measurements_judgement newest where newest.reading_id = "measurements_reading"."id") left join "measurements_delivery" on "measurements_delivery"."id" = "measurements_reading"."delivery_id" where "measurements_reading"."voided_at" is null and ("measurements_reading"."delivery_id" is null or ("measurements_delivery"."published_at" is not null and "measurements_delivery"."withdrawn_at" is null)) and not exists (select 1 from measurements_reading later where later.supersedes_id = "measurements_reading"."id");--> statement-breakpoint
-CREATE VIEW `systems_point_directory` AS select "systems_point"."id" as "point_id", "systems_point"."code" as "point_code", "systems_point"."name" as "point_name", "systems_point"."is_default" as "is_default_point", "systems_point"."is_in_use" as "is_point_in_use", "systems_system"."id" as "system_id", "systems_system"."code" as "system_code", "systems_system"."name" as "system_name", "systems_system"."state" as "system_state", "systems_system"."walking_order" as "system_order", "systems_area"."id" as "area_id", "systems_area"."code" as "area_code", "systems_area"."name" as "area_name", "systems_area"."walking_order" as "area_order" from "systems_point" inner join "systems_system" on "systems_system"."id" = "systems_point"."system_id" inner join "systems_area" on "systems_area"."id" = "systems_system"."area_id";
+CREATE VIEW `measurements_reading_in_force` AS 
+  select r.id, r.uuid, r.point_id, r.parameter_id, r.typed_text, r.typed_unit, r.value, r.qualifier, r.answer,
+    r.taken_at, r.entered_at, r.taken_by, r.entered_by, r.method_id, r.instrument_id, r.source, r.source_ref,
+    r.delivery_id, r.note, r.supersedes_id, r.correction_reason, r.confirmed_by, r.confirmed_at,
+    j.id as judgement_id, coalesce(j.status, 'none') as status, j.side, coalesce(j.sentence, '') as sentence,
+    j.limit_version_id
+  from measurements_reading r
+  left join measurements_judgement j
+    on j.id = (select max(newest.id) from measurements_judgement newest where newest.reading_id = r.id)
+  left join measurements_delivery d on d.id = r.delivery_id
+  where r.voided_at is null
+    and (r.delivery_id is null or (d.published_at is not null and d.withdrawn_at is null))
+    and not exists (select 1 from measurements_reading later where later.supersedes_id = r.id);--> statement-breakpoint
+CREATE VIEW `methods_parameter_directory` AS 
+  select p.id as parameter_id, p.code as parameter_code, p.name as parameter_name, p.unit as parameter_unit,
+    p.decimals as parameter_decimals
+  from methods_parameter p;--> statement-breakpoint
+CREATE VIEW `systems_point_directory` AS 
+  select p.id as point_id, p.code as point_code, p.name as point_name, p.is_default as is_default_point,
+    p.is_in_use as is_point_in_use, s.id as system_id, s.code as system_code, s.name as system_name,
+    s.state as system_state, s.walking_order as system_order, a.id as area_id, a.code as area_code,
+    a.name as area_name, a.walking_order as area_order
+  from systems_point p join systems_system s on s.id = p.system_id join systems_area a on a.id = s.area_id;

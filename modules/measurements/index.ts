@@ -15,4 +15,4 @@ export { limitsInForce } from "./limits";
 export { getLimitWorkbook, listLimits, listLimitTemplates, listLimitWorkbooks } from "./queries/list-limits";
 export { getReading, getSeries, listReadings } from "./queries/list-readings";
 export { listWatch } from "./queries/list-watch";
-export { explanation, reading, readingInForce } from "./views";
+export { explanation, reading, readingInForce, watchItem } from "./views";

@@ -1,4 +1,4 @@
-import { eq, isNull, sql } from "drizzle-orm";
+import { sql } from "drizzle-orm";
 import {
   type AnySQLiteColumn,
   index,
@@ -189,45 +189,45 @@ export const explanation = sqliteTable(
 );
 
 /** Readings that count now, each with its newest judgement: not voided, not corrected, not of a withdrawn delivery. */
-export const readingInForce = sqliteView("measurements_reading_in_force").as((qb) =>
-  qb
-    .select({
-      id: sql<number>`${reading.id}`.as("id"),
-      uuid: sql<string>`${reading.uuid}`.as("uuid"),
-      pointId: sql<number>`${reading.pointId}`.as("point_id"),
-      parameterId: sql<number>`${reading.parameterId}`.as("parameter_id"),
-      typedText: sql<string>`${reading.typedText}`.as("typed_text"),
-      typedUnit: sql<string | null>`${reading.typedUnit}`.as("typed_unit"),
-      value: sql<number | null>`${reading.value}`.as("value"),
-      qualifier: sql<(typeof QUALIFIERS)[number]>`${reading.qualifier}`.as("qualifier"),
-      answer: sql<string | null>`${reading.answer}`.as("answer"),
-      takenAt: sql<number>`${reading.takenAt}`.as("taken_at"),
-      enteredAt: sql<number>`${reading.enteredAt}`.as("entered_at"),
-      takenBy: sql<number>`${reading.takenBy}`.as("taken_by"),
-      enteredBy: sql<number>`${reading.enteredBy}`.as("entered_by"),
-      methodId: sql<number | null>`${reading.methodId}`.as("method_id"),
-      instrumentId: sql<number | null>`${reading.instrumentId}`.as("instrument_id"),
-      source: sql<(typeof READING_SOURCES)[number]>`${reading.source}`.as("source"),
-      sourceRef: sql<string | null>`${reading.sourceRef}`.as("source_ref"),
-      deliveryId: sql<number | null>`${reading.deliveryId}`.as("delivery_id"),
-      note: sql<string | null>`${reading.note}`.as("note"),
-      supersedesId: sql<number | null>`${reading.supersedesId}`.as("supersedes_id"),
-      correctionReason: sql<string | null>`${reading.correctionReason}`.as("correction_reason"),
-      confirmedAt: sql<number | null>`${reading.confirmedAt}`.as("confirmed_at"),
-      confirmedBy: sql<number | null>`${reading.confirmedBy}`.as("confirmed_by"),
-      judgementId: sql<number | null>`${judgement.id}`.as("judgement_id"),
-      status: sql<(typeof STATUSES)[number]>`coalesce(${judgement.status}, 'none')`.as("status"),
-      side: sql<(typeof SIDES)[number] | null>`${judgement.side}`.as("side"),
-      sentence: sql<string>`coalesce(${judgement.sentence}, '')`.as("sentence"),
-      limitVersionId: sql<number | null>`${judgement.limitVersionId}`.as("limit_version_id"),
-    })
-    .from(reading)
-    .leftJoin(
-      judgement,
-      sql`${judgement.id} = (select max(newest.id) from measurements_judgement newest where newest.reading_id = ${reading.id})`,
-    )
-    .leftJoin(delivery, eq(delivery.id, reading.deliveryId))
-    .where(
-      sql`${isNull(reading.voidedAt)} and (${reading.deliveryId} is null or (${delivery.publishedAt} is not null and ${delivery.withdrawnAt} is null)) and not exists (select 1 from measurements_reading later where later.supersedes_id = ${reading.id})`,
-    ),
-);
+export const readingInForce = sqliteView("measurements_reading_in_force", {
+  id: integer("id").notNull(),
+  uuid: text("uuid").notNull(),
+  pointId: integer("point_id").notNull(),
+  parameterId: integer("parameter_id").notNull(),
+  typedText: text("typed_text").notNull(),
+  typedUnit: text("typed_unit"),
+  value: real("value"),
+  qualifier: text("qualifier", { enum: QUALIFIERS }).notNull(),
+  answer: text("answer"),
+  takenAt: integer("taken_at").notNull(),
+  enteredAt: integer("entered_at").notNull(),
+  takenBy: integer("taken_by").notNull(),
+  enteredBy: integer("entered_by").notNull(),
+  methodId: integer("method_id"),
+  instrumentId: integer("instrument_id"),
+  source: text("source", { enum: READING_SOURCES }).notNull(),
+  sourceRef: text("source_ref"),
+  deliveryId: integer("delivery_id"),
+  note: text("note"),
+  supersedesId: integer("supersedes_id"),
+  correctionReason: text("correction_reason"),
+  confirmedBy: integer("confirmed_by"),
+  confirmedAt: integer("confirmed_at"),
+  judgementId: integer("judgement_id"),
+  status: text("status", { enum: STATUSES }).notNull(),
+  side: text("side", { enum: SIDES }),
+  sentence: text("sentence").notNull(),
+  limitVersionId: integer("limit_version_id"),
+}).as(sql`
+  select r.id, r.uuid, r.point_id, r.parameter_id, r.typed_text, r.typed_unit, r.value, r.qualifier, r.answer,
+    r.taken_at, r.entered_at, r.taken_by, r.entered_by, r.method_id, r.instrument_id, r.source, r.source_ref,
+    r.delivery_id, r.note, r.supersedes_id, r.correction_reason, r.confirmed_by, r.confirmed_at,
+    j.id as judgement_id, coalesce(j.status, 'none') as status, j.side, coalesce(j.sentence, '') as sentence,
+    j.limit_version_id
+  from measurements_reading r
+  left join measurements_judgement j
+    on j.id = (select max(newest.id) from measurements_judgement newest where newest.reading_id = r.id)
+  left join measurements_delivery d on d.id = r.delivery_id
+  where r.voided_at is null
+    and (r.delivery_id is null or (d.published_at is not null and d.withdrawn_at is null))
+    and not exists (select 1 from measurements_reading later where later.supersedes_id = r.id)`);

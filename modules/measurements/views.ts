@@ -1,2 +1,2 @@
 /** What higher floors may read of this module's tables: to join, never to write. */
-export { explanation, reading, readingInForce } from "./schema";
+export { explanation, reading, readingInForce, watchItem } from "./schema";

@@ -2,3 +2,4 @@ import "server-only";
 
 export { allParameters, findParameterByCode, getParameter } from "./parameters";
 export { toCanonical } from "./rules/to-canonical";
+export { parameterDirectory } from "./views";

@@ -1,5 +1,5 @@
 import { sql } from "drizzle-orm";
-import { index, integer, real, sqliteTable, text, uniqueIndex } from "drizzle-orm/sqlite-core";
+import { index, integer, real, sqliteTable, sqliteView, text, uniqueIndex } from "drizzle-orm/sqlite-core";
 import { CHECK_VERDICTS, INSTRUMENT_STATES, PARAMETER_GROUPS, PARAMETER_KINDS } from "./model";
 
 /** What is measured or checked. The code is what people type and files carry; it never changes. */
@@ -83,3 +83,15 @@ export const instrumentCheck = sqliteTable(
   },
   (table) => [index("methods_instrument_check_latest").on(table.instrumentId, table.checkedAt)],
 );
+
+/** Parameters by id, code and name: how other modules join this one (through the door). */
+export const parameterDirectory = sqliteView("methods_parameter_directory", {
+  parameterId: integer("parameter_id").notNull(),
+  parameterCode: text("parameter_code").notNull(),
+  parameterName: text("parameter_name").notNull(),
+  parameterUnit: text("parameter_unit"),
+  parameterDecimals: integer("parameter_decimals").notNull(),
+}).as(sql`
+  select p.id as parameter_id, p.code as parameter_code, p.name as parameter_name, p.unit as parameter_unit,
+    p.decimals as parameter_decimals
+  from methods_parameter p`);

@@ -1,0 +1,6 @@
+import "server-only";
+
+export { roundsMay } from "./abilities";
+export { reviewDays } from "./commands/review-days";
+export { dayLimits } from "./day-sheet";
+export { type DaySheetShown, getDaySheet, listDaySheets } from "./queries/get-day-sheet";

@@ -1,0 +1,22 @@
+import { z } from "zod";
+
+export const sheetKey = z.strictObject({
+  areaId: z.coerce.number().int().positive(),
+  onDay: z.iso.date("Write a day such as 2026-03-01."),
+});
+
+export const reviewDaysInput = z.strictObject({
+  outcome: z.enum(["reviewed", "returned"]),
+  comment: z.string().trim().max(1000).default(""),
+  sheets: z
+    .array(
+      z.strictObject({
+        areaId: z.number().int().positive(),
+        onDay: z.iso.date(),
+        /** Hash of what the person had before them. */
+        contentHash: z.string().length(64),
+      }),
+    )
+    .min(1, "Choose at least one sheet.")
+    .max(100, "Review at most 100 sheets at once."),
+});
