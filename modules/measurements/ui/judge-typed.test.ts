@@ -1,6 +1,6 @@
 import { describe, expect, it } from "vitest";
-import { applySlip, judgeTyped, shortGround, slipLabel } from "./judge-typed";
 import { aReading, aWatchRow, HOUR } from "@/tests/support/watch-row";
+import { applySlip, judgeTyped, shortGround, slipLabel } from "./judge-typed";
 
 const NOW = Date.UTC(2026, 2, 2, 9, 0);
 const typed = (text: string, unit: string | null = null) => ({ text, unit, takenAt: NOW });
@@ -29,7 +29,10 @@ describe("judging what is typed", () => {
   it("compares with every reading of the last 24 h, not with the last alone", () => {
     const row = temperature({
       bounds: { greatestChange24h: 1 },
-      recent: [aReading({ value: 24.6, takenAt: NOW - 6 * HOUR }), aReading({ value: 24, takenAt: NOW - 12 * HOUR })],
+      recent: [
+        aReading({ value: 24.6, takenAt: NOW - 6 * HOUR }),
+        aReading({ value: 24, takenAt: NOW - 12 * HOUR }),
+      ],
     });
     const found = judgeTyped(row, typed("25.2", "°C"));
     expect(found).toMatchObject({ state: "judged", verdict: { status: "out", side: "change" } });
@@ -52,8 +55,16 @@ describe("judging what is typed", () => {
   });
 
   it("cannot judge <0.05 against 0.0075", () => {
-    const row = aWatchRow({ unit: "mg/L", acceptedUnits: ["mg/L"], decimals: 3, bounds: { toleranceHigh: 0.0075 } });
-    expect(judgeTyped(row, typed("<0.05", "mg/L"))).toMatchObject({ verdict: { status: "unjudged" }, mustBeConfirmed: false });
+    const row = aWatchRow({
+      unit: "mg/L",
+      acceptedUnits: ["mg/L"],
+      decimals: 3,
+      bounds: { toleranceHigh: 0.0075 },
+    });
+    expect(judgeTyped(row, typed("<0.05", "mg/L"))).toMatchObject({
+      verdict: { status: "unjudged" },
+      mustBeConfirmed: false,
+    });
   });
 
   it("says what to write where there is no value in it", () => {
@@ -74,7 +85,9 @@ describe("slips", () => {
       acceptedUnits: ["pH"],
       decimals: 2,
       plausible: { low: 0, high: 14 },
-      recent: [8.1, 8.12, 8.09, 8.11, 8.1].map((value, index) => aReading({ value, takenAt: NOW - (index + 1) * 25 * HOUR })),
+      recent: [8.1, 8.12, 8.09, 8.11, 8.1].map((value, index) =>
+        aReading({ value, takenAt: NOW - (index + 1) * 25 * HOUR }),
+      ),
     });
 
   it("offers 8.12 for 81.2 and keeps the person's comma", () => {
@@ -94,7 +107,12 @@ describe("slips", () => {
 
 describe("short grounds", () => {
   it("shows a small limit with all its digits", () => {
-    const row = aWatchRow({ unit: "mg/L", acceptedUnits: ["mg/L"], decimals: 2, bounds: { toleranceHigh: 0.0075 } });
+    const row = aWatchRow({
+      unit: "mg/L",
+      acceptedUnits: ["mg/L"],
+      decimals: 2,
+      bounds: { toleranceHigh: 0.0075 },
+    });
     const found = judgeTyped(row, typed("0.01", "mg/L"));
     if (found.state !== "judged") throw new Error("it is a number");
     expect(shortGround(found.verdict, 2)).toBe("above 0.0075");

@@ -143,4 +143,3 @@ function fixed(value: number, decimals: number): string {
   const text = (full.split(".")[1] ?? "").length > decimals ? full : value.toFixed(decimals);
   return text.replace("-", "\u2212");
 }
-

@@ -27,7 +27,14 @@ function bench(store = new Map<string, string>()) {
       const fault = behave();
       if (fault) throw fault;
       const [reading] = (body as { readings?: OutgoingReading[] }).readings ?? [];
-      const answer = { uuid: reading?.uuid, readingId: 41, isRepeat: false, status: "within", side: null, sentence: "" };
+      const answer = {
+        uuid: reading?.uuid,
+        readingId: 41,
+        isRepeat: false,
+        status: "within",
+        side: null,
+        sentence: "",
+      };
       return { data: { readings: [{ ...answer, mustBeConfirmed: false }] } } as Answer;
     },
   });
@@ -111,7 +118,11 @@ describe("the outbox", () => {
       personId: 8,
       now: () => 0,
       later: () => () => undefined,
-      keep: { getItem: (key) => first.store.get(key) ?? null, setItem: () => undefined, removeItem: () => undefined },
+      keep: {
+        getItem: (key) => first.store.get(key) ?? null,
+        setItem: () => undefined,
+        removeItem: () => undefined,
+      },
     });
     expect(other.snapshot().items).toEqual([]);
   });
@@ -121,7 +132,9 @@ describe("the outbox", () => {
     answerWith(() => refusal(422, "The time lies in the future."));
     outbox.add(item("a"));
     await settle();
-    expect(outbox.snapshot().items).toMatchObject([{ stage: "refused", sentence: "The time lies in the future." }]);
+    expect(outbox.snapshot().items).toMatchObject([
+      { stage: "refused", sentence: "The time lies in the future." },
+    ]);
     expect(timers).toEqual([]);
     outbox.retry();
     await settle();
@@ -163,7 +176,10 @@ describe("the outbox", () => {
     answerWith(() => undefined);
     timers[0]?.run();
     await settle();
-    expect(calls.at(-1)).toMatchObject({ path: "/api/v1/readings/41/explanation", body: { text: "The chiller was off." } });
+    expect(calls.at(-1)).toMatchObject({
+      path: "/api/v1/readings/41/explanation",
+      body: { text: "The chiller was off." },
+    });
   });
 
   it("has at most four requests under way and sends all of ninety-six", async () => {

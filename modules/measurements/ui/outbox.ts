@@ -198,7 +198,8 @@ export class Outbox {
   }
 
   #failed(error: unknown): { stage: SendStage; sentence: string } {
-    const isLost = error instanceof NetworkProblem || (error instanceof ApiProblem && isPassing(error.status));
+    const isLost =
+      error instanceof NetworkProblem || (error instanceof ApiProblem && isPassing(error.status));
     if (!isLost) {
       const sentence = error instanceof Error ? error.message : "The server refused it without saying why.";
       return { stage: "refused", sentence };
