@@ -28,6 +28,11 @@ export function logGamma(x: number): number {
     product *= y;
     y += 1;
   }
+  return (y - 0.5) * Math.log(y) - y + 0.5 * Math.log(2 * Math.PI) + stirlingRest(y) - Math.log(product);
+}
+
+/** Stirling's series: what is left of ln Gamma(y) beside (y - 1/2) ln y - y + ln(2 pi)/2; for y of 15 or more. */
+function stirlingRest(y: number): number {
   const inverse = 1 / y;
   let power = inverse;
   let series = 0;
@@ -35,7 +40,14 @@ export function logGamma(x: number): number {
     series += coefficient * power;
     power *= inverse * inverse;
   }
-  return (y - 0.5) * Math.log(y) - y + 0.5 * Math.log(2 * Math.PI) + series - Math.log(product);
+  return series;
+}
+
+/** ln Gamma(a + b) - ln Gamma(a), without the loss of digits of a difference when a is large. */
+export function logGammaStep(a: number, b: number): number {
+  if (a < 15) return logGamma(a + b) - logGamma(a);
+  const growth = (a - 0.5) * Math.log1p(b / a) + b * Math.log(a + b) - b;
+  return growth + stirlingRest(a + b) - stirlingRest(a);
 }
 
 /** Lower regularised incomplete gamma P(a, x) by its power series; best for x < a + 1. */

@@ -83,11 +83,13 @@ export function standardDeviation(values: Values): number {
 export function lagOneAutocorrelation(values: Values): number {
   const n = requireValues(values, 3);
   const centre = mean(values);
-  const below = sumOfSquares(values, centre);
+  const near = Float64Array.from(values, (value) => value - centre);
+  const rest = sum(near) / n;
+  const deviations = near.map((deviation) => deviation - rest);
+  const below = sum(deviations.map((deviation) => deviation * deviation));
   if (!(below > 0)) {
     throw new RangeError("All values are equal: their autocorrelation is undefined.");
   }
-  const products = new Float64Array(n - 1);
-  for (let i = 0; i < n - 1; i++) products[i] = (values[i]! - centre) * (values[i + 1]! - centre);
+  const products = deviations.subarray(1).map((deviation, i) => deviation * deviations[i]!);
   return sum(products) / below;
 }

@@ -1,5 +1,5 @@
 import { boundBelow, findRoot } from "./find-root";
-import { logGamma } from "./gamma";
+import { logGamma, logGammaStep } from "./gamma";
 import { gaussLegendre } from "./gauss-legendre";
 import { normalCdf } from "./normal";
 import { requireFinite, requirePositive, requireProbability } from "./values";
@@ -34,14 +34,22 @@ function betaFraction(x: number, a: number, b: number): number {
 export function regularisedBeta(x: number, rest: number, a: number, b: number): number {
   if (x <= 0) return 0;
   if (rest <= 0) return 1;
-  const logFactor = logGamma(a + b) - logGamma(a) - logGamma(b) + a * Math.log(x) + b * Math.log(rest);
+  const logBeta = logGamma(Math.min(a, b)) - logGammaStep(Math.max(a, b), Math.min(a, b));
+  const logX = x < 0.5 ? Math.log(x) : Math.log1p(-rest);
+  const logFactor = a * logX + b * Math.log(rest) - logBeta;
   const factor = Math.exp(logFactor);
   if (x < (a + 1) / (a + b + 2)) return (factor * betaFraction(x, a, b)) / a;
   return 1 - (factor * betaFraction(rest, b, a)) / b;
 }
 
+/** Refuses degrees of freedom of zero or less; infinitely many give the normal distribution. */
+function requireDf(df: number): void {
+  if (!(df > 0)) throw new RangeError("Degrees of freedom must be greater than zero.");
+}
+
 /** The share of Student's t distribution above a t of zero or more. */
 function upperTail(t: number, df: number): number {
+  if (df === Number.POSITIVE_INFINITY) return normalCdf(-t);
   const square = t * t;
   const sum = df + square;
   return 0.5 * regularisedBeta(df / sum, square / sum, df / 2, 0.5);
@@ -52,20 +60,20 @@ function upperTail(t: number, df: number): number {
  * @example studentTCdf(0, 5) // => 0.5
  */
 export function studentTCdf(t: number, df: number): number {
-  requirePositive(df, "Degrees of freedom");
+  requireDf(df);
   requireFinite(t, "t");
   return t < 0 ? upperTail(-t, df) : 1 - upperTail(t, df);
 }
 
 /**
- * The t below which the share p of Student's distribution lies; df need not be whole.
+ * The t below which the share p of Student's distribution lies; df need not be whole and may be infinite.
  *
  * Domain: 0 < p < 1, df > 0; throws RangeError outside.
  * Checked: one-sided 99 % values of 40 CFR 136 Appendix B (3.143 for 6 degrees of freedom), scipy.
  * @example studentTQuantile(0.5, 3) // => 0
  */
 export function studentTQuantile(p: number, df: number): number {
-  requirePositive(df, "Degrees of freedom");
+  requireDf(df);
   requireProbability(p, "p");
   if (p < 0.5) return -upperQuantile(p, df);
   return upperQuantile(1 - p, df);
@@ -79,7 +87,7 @@ function upperQuantile(tail: number, df: number): number {
 
 /**
  * The share of the noncentral t distribution (df, noncentrality delta) below t, by integrating over the chi
- * distribution of the denominator.
+ * distribution of the denominator (in its fourth root, which keeps small df smooth).
  *
  * Source: definition T = (Z + delta) / (chi / sqrt(df)). Checked: df 4, delta 4.06727564116139 gives 0.05 at 2.1318.
  * @example noncentralTCdf(0, 5, 0).toFixed(12) // => "0.500000000000"
@@ -87,12 +95,13 @@ function upperQuantile(tail: number, df: number): number {
 export function noncentralTCdf(t: number, df: number, delta: number): number {
   requirePositive(df, "Degrees of freedom");
   const middle = Math.sqrt(df);
-  const { nodes, weights } = gaussLegendre(160, Math.max(0, middle - 9), middle + 9);
-  const logScale = (1 - df / 2) * Math.LN2 - logGamma(df / 2);
+  const from = Math.max(0, middle - 9) ** 0.25;
+  const { nodes, weights } = gaussLegendre(160, from, (middle + 9) ** 0.25);
+  const logScale = (1 - df / 2) * Math.LN2 - logGamma(df / 2) + Math.log(4);
   let total = 0;
   for (let i = 0; i < nodes.length; i++) {
-    const chi = nodes[i]!;
-    const density = Math.exp(logScale + (df - 1) * Math.log(chi) - 0.5 * chi * chi);
+    const chi = nodes[i]! ** 4;
+    const density = Math.exp(logScale + (df - 0.25) * Math.log(chi) - 0.5 * chi * chi);
     total += weights[i]! * density * normalCdf((t * chi) / middle - delta);
   }
   return Math.min(1, total);

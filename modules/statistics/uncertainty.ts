@@ -142,7 +142,7 @@ export function expandedUncertainty(input: {
   if (!(input.df >= 1)) throw new RangeError("Degrees of freedom below 1 give no expanded uncertainty.");
   const df = wholeDf === "truncate" && Number.isFinite(input.df) ? Math.floor(input.df) : input.df;
   const p = 1 - (1 - requireProbability(confidence, "confidence")) / 2;
-  const k = studentTQuantile(p, Math.min(df, 1e9));
+  const k = studentTQuantile(p, df);
   return { k, expanded: k * u, df };
 }
 
