@@ -9,6 +9,7 @@ export { type Reaction, type ReactionTable, useReactions } from "./jobs/queue";
 export { defineTask, JobRunner, type Task, type WorkTable } from "./jobs/runner";
 export { migrateDatabase, sealOutsideCommand } from "./migrate";
 export { parseInput } from "./parse-input";
+export { filterCondition, getEntry, getRecordHistory, historyFilter, listEntries, listVerbs } from "./queries/list-entries";
 export { type Answer, runCommand, type RunOptions } from "./run-command";
 export { upkeep } from "./upkeep";
 export { type Finding, type Verification, verifyHistory } from "./verify";
