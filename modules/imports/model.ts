@@ -24,15 +24,19 @@ export type FileDelimiter = "," | ";" | "\t" | "|";
 /** The first day of a workbook's serial dates: 1 January 1900 or 1 January 1904. */
 export type SerialEpoch = 1900 | 1904;
 
+/** Whether a workbook's cell is shown as a day, as a time of day (with or without its day), or as neither. */
+export type DateStyle = "day" | "time" | null;
+
 /**
- * One cell as the file holds it. Text files have texts only. Workbooks have numbers, yes/no, dates (serials),
+ * One cell as the file holds it. Text files have texts only. Workbooks have numbers, yes/no, dates (serials,
+ * a whole one being midnight where the cell shows a time),
  * formulas with the result last saved (null when none was), and error values such as #N/A.
  */
 export type PlainCell = string | number | boolean | null;
 export type RawCell =
   | PlainCell
-  | { kind: "serial"; value: number }
-  | { kind: "formula"; value: PlainCell; isSerial: boolean }
+  | { kind: "serial"; value: number; showsTime: boolean }
+  | { kind: "formula"; value: PlainCell; dateStyle: DateStyle }
   | { kind: "error"; text: string };
 
 /** One record. `line` is the line of a text file on which it begins, or the row number of a worksheet. */

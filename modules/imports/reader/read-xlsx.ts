@@ -1,4 +1,10 @@
-import { IMPORT_LIMITS, type PlainCell, type RawCell, type RawRow } from "@/modules/imports/model";
+import {
+  type DateStyle,
+  IMPORT_LIMITS,
+  type PlainCell,
+  type RawCell,
+  type RawRow,
+} from "@/modules/imports/model";
 import { readXml } from "@/modules/imports/reader/read-xml";
 import type { RowSource } from "@/modules/imports/reader/row-source";
 import {
@@ -85,7 +91,7 @@ class SheetBuilder {
   #cells: RawCell[] = [];
   #column = -1;
   #type = "n";
-  #isDate = false;
+  #dateStyle: DateStyle = null;
   #hasFormula = false;
   #value: string | null = null;
   #isReading = false;
@@ -135,7 +141,7 @@ class SheetBuilder {
   #openCell(attributes: Record<string, string>): void {
     this.#column = columnOf(attributes.r) ?? this.#column + 1;
     this.#type = attributes.t ?? "n";
-    this.#isDate = this.#workbook.dateStyles[Number(attributes.s ?? 0)] ?? false;
+    this.#dateStyle = this.#workbook.dateStyles[Number(attributes.s ?? 0)] ?? null;
     this.#hasFormula = false;
     this.#value = null;
   }
@@ -158,9 +164,10 @@ class SheetBuilder {
   #cell(): RawCell {
     if (this.#type === "e" && this.#value !== null) return { kind: "error", text: this.#value };
     const value = this.#plain();
-    const isSerial = this.#isDate && typeof value === "number";
-    if (this.#hasFormula) return { kind: "formula", value: value === "" ? null : value, isSerial };
-    return isSerial ? { kind: "serial", value } : value;
+    const dateStyle = typeof value === "number" ? this.#dateStyle : null;
+    if (this.#hasFormula) return { kind: "formula", value: value === "" ? null : value, dateStyle };
+    if (dateStyle === null || typeof value !== "number") return value;
+    return { kind: "serial", value, showsTime: dateStyle === "time" };
   }
 
   #plain(): PlainCell {

@@ -1,4 +1,4 @@
-import type { SerialEpoch } from "@/modules/imports/model";
+import type { DateStyle, SerialEpoch } from "@/modules/imports/model";
 import { macroWorkbook } from "@/modules/imports/reader/file-kind";
 import { readWholeXml } from "@/modules/imports/reader/read-xml";
 import { damaged, type GuardedZip } from "@/modules/imports/reader/zip-guard";
@@ -11,8 +11,8 @@ export type WorkbookParts = {
   sheets: SheetPart[];
   serialEpoch: SerialEpoch;
   sharedStrings: string[];
-  /** For each cell style: is it a date or time format? */
-  dateStyles: boolean[];
+  /** For each cell style: does it show a date, a time, or neither? */
+  dateStyles: DateStyle[];
 };
 
 type Relation = { id: string; type: string; target: string };
@@ -58,20 +58,25 @@ async function refuseMacros(zip: GuardedZip): Promise<void> {
 }
 
 /** Number formats that are dates or times without a format code in the file. Source: ECMA-376 part 1, 18.8.30. */
-const isBuiltInDate = (id: number): boolean =>
-  (id >= 14 && id <= 22) || (id >= 27 && id <= 36) || (id >= 45 && id <= 47) || (id >= 50 && id <= 58);
+function builtInStyle(id: number): DateStyle {
+  if ((id >= 18 && id <= 22) || id === 32 || id === 33 || (id >= 45 && id <= 47) || id === 55 || id === 56)
+    return "time";
+  return (id >= 14 && id <= 17) || (id >= 27 && id <= 36) || (id >= 50 && id <= 58) ? "day" : null;
+}
 
 /** Does a format code show a date or a time? Quoted text, escapes, colours and locales count for nothing. */
-export function isDateFormat(code: string): boolean {
+export function dateStyleOf(code: string): DateStyle {
   const bare = (code.split(";")[0] ?? "")
     .replace(/"[^"]*"|\\.|_.|\*./g, "")
     .replace(/\[(?![hms]+\])[^\]]*\]/gi, "");
-  return !/general/i.test(bare) && /[ymdhs]/i.test(bare);
+  if (/general/i.test(bare)) return null;
+  if (/[hs]/i.test(bare)) return "time";
+  return /[ymd]/i.test(bare) ? "day" : null;
 }
 
-async function readDateStyles(zip: GuardedZip, part: string | undefined): Promise<boolean[]> {
+async function readDateStyles(zip: GuardedZip, part: string | undefined): Promise<DateStyle[]> {
   const codes = new Map<number, string>();
-  const styles: boolean[] = [];
+  const styles: DateStyle[] = [];
   let isInCells = false;
   if (!part || !zip.has(part)) return styles;
   await readWholeXml(zip.read(part), {
@@ -81,7 +86,7 @@ async function readDateStyles(zip: GuardedZip, part: string | undefined): Promis
       if (name !== "xf" || !isInCells) return;
       const id = Number(attributes.numFmtId ?? 0);
       const code = codes.get(id);
-      styles.push(code === undefined ? isBuiltInDate(id) : isDateFormat(code));
+      styles.push(code === undefined ? builtInStyle(id) : dateStyleOf(code));
     },
     close: (name) => {
       if (name === "cellXfs") isInCells = false;

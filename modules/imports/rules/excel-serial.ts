@@ -27,7 +27,7 @@ function clock(seconds: number): string {
  * as a fraction is never exact.
  * Formula: 1900 system: n ≥ 61: 30 Dec 1899 + n; n < 60: 31 Dec 1899 + n; 60 is 29 Feb 1900, a day that never was.
  * 1904 system: 1 Jan 1904 + n. Source: ECMA-376 part 1, 18.17.4 (both systems).
- * @example fromSerial(45000.760416666664, 1900) // 2023-03-15 18:15
+ * @example fromSerial(45000.760416666664, 1900) // => { kind: "moment", on: "2023-03-15", at: "18:15", hasTime: true }
  */
 export function fromSerial(serial: number, epoch: SerialEpoch): SerialReading {
   const last = epoch === 1900 ? LAST_SERIAL_1900 : LAST_SERIAL_1900 - SERIAL_EPOCH_DIFFERENCE;

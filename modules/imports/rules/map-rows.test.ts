@@ -101,7 +101,7 @@ describe("RowMapper", () => {
   });
 
   it("takes a formula's saved result with a remark and refuses one without", () => {
-    const formula = (value: number | null): RawCell => ({ kind: "formula", value, isSerial: false });
+    const formula = (value: number | null): RawCell => ({ kind: "formula", value, dateStyle: null });
     const { candidates, problems } = read(
       [WIDE, ["KELP-01", "2026-03-14 09:00", formula(12.5), formula(null)]],
       {},
@@ -113,7 +113,7 @@ describe("RowMapper", () => {
 
   it("remarks numbers that a workbook holds as text, and refuses values that became dates", () => {
     const { candidates, problems } = read(
-      [WIDE, ["KELP-01", "2026-03-14 09:00", "12.5", { kind: "serial", value: 46364 }]],
+      [WIDE, ["KELP-01", "2026-03-14 09:00", "12.5", { kind: "serial", value: 46364, showsTime: false }]],
       {},
       { kind: "xlsx" },
     );

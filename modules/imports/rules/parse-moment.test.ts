@@ -144,12 +144,14 @@ describe("parseMoment", () => {
   });
 
   it("reads workbook dates of both epochs", () => {
-    const serial = (value: number): RawCell => ({ kind: "serial", value });
+    const serial = (value: number): RawCell => ({ kind: "serial", value, showsTime: false });
     expect(utc(serial(45000.760416666664))).toBe("2023-03-15T18:15:00.000Z");
     expect(utc(serial(43538.760416666664), {}, { serialEpoch: 1904 })).toBe("2023-03-15T18:15:00.000Z");
     expect(utc(45000.760416666664)).toBe("2023-03-15T18:15:00.000Z");
     expect(code(serial(60.4))).toBe("phantom-day");
-    expect([code(8.12), code("45000.76"), code({ kind: "serial", value: -3 })]).toEqual(
+    expect(code(serial(45000))).toBe("missing-moment");
+    expect(utc({ kind: "serial", value: 45000, showsTime: true })).toBe("2023-03-15T00:00:00.000Z");
+    expect([code(8.12), code("45000.76"), code({ kind: "serial", value: -3, showsTime: true })]).toEqual(
       Array(3).fill("bad-date"),
     );
   });
@@ -157,7 +159,10 @@ describe("parseMoment", () => {
   it("puts a day and a time of day together, workbook cells too", () => {
     const context = { zone: "UTC", serialEpoch: 1900 as const, answers: {}, defaults: {} };
     const joined = parseMoment(
-      { date: { kind: "serial", value: 45000 }, time: { kind: "serial", value: 0.75 } },
+      {
+        date: { kind: "serial", value: 45000, showsTime: false },
+        time: { kind: "serial", value: 0.75, showsTime: true },
+      },
       context,
     );
     expect(joined).toMatchObject({ epochMs: Date.UTC(2023, 2, 15, 18) });

@@ -7,9 +7,7 @@ import {
   parseDateText,
   parseTimeText,
 } from "@/modules/imports/rules/parse-date-text";
-
-/** The cells that together say when. */
-export type MomentCells = { moment?: RawCell; date?: RawCell; time?: RawCell };
+import { cellText, type MomentCells, plainCell } from "@/modules/imports/rules/row-cells";
 
 export type MomentResult =
   | {
@@ -43,21 +41,12 @@ const refused = (code: MomentRefusal["code"], reason: string, mend: string): Mom
   mend,
 });
 
-const withoutFormula = (cell: RawCell | undefined): RawCell | undefined => {
-  if (cell === null || typeof cell !== "object" || cell.kind !== "formula") return cell;
-  return cell.isSerial && typeof cell.value === "number" ? { kind: "serial", value: cell.value } : cell.value;
-};
-
-/** What stood in the cell, for a person. */
-function cellText(cell: RawCell | undefined): string {
-  const plain = withoutFormula(cell);
-  if (plain === null || plain === undefined) return "";
-  if (typeof plain !== "object") return String(plain).trim();
-  return plain.kind === "error" ? plain.text : plain.kind === "serial" ? String(plain.value) : "";
-}
-
-function fromSerialCell(value: number, isDateCell: boolean, context: Context): DateText | MomentRefusal {
-  const isPlausible = isDateCell || (value >= PLAIN_SERIAL.from && value < PLAIN_SERIAL.to);
+function fromSerialCell(
+  value: number,
+  dateCell: { showsTime: boolean } | null,
+  context: Context,
+): DateText | MomentRefusal {
+  const isPlausible = dateCell !== null || (value >= PLAIN_SERIAL.from && value < PLAIN_SERIAL.to);
   const reading = isPlausible ? fromSerial(value, context.serialEpoch) : { kind: "out-of-range" as const };
   if (reading.kind === "phantom") {
     return refused(
@@ -77,17 +66,17 @@ function fromSerialCell(value: number, isDateCell: boolean, context: Context): D
     kind: "date",
     dayFirst: reading.on,
     monthFirst: reading.on,
-    at: reading.hasTime ? reading.at : null,
+    at: reading.hasTime || dateCell?.showsTime ? reading.at : null,
     offset: null,
   };
 }
 
 function dateOf(cell: RawCell | undefined, context: Context): DateText | MomentRefusal {
-  const plain = withoutFormula(cell);
+  const plain = plainCell(cell);
   if (plain === null || plain === undefined || plain === "") {
     return refused("missing-moment", "The date is missing.", "Fill in when the reading was taken.");
   }
-  if (typeof plain === "number") return fromSerialCell(plain, false, context);
+  if (typeof plain === "number") return fromSerialCell(plain, null, context);
   if (typeof plain === "string") {
     if (plain.trim() === "") return dateOf(null, context);
     if (/^\d{5}(?:[.,]\d+)?$/.test(plain.trim())) {
@@ -99,7 +88,8 @@ function dateOf(cell: RawCell | undefined, context: Context): DateText | MomentR
     }
     return parseDateText(plain);
   }
-  if (typeof plain === "object" && plain.kind === "serial") return fromSerialCell(plain.value, true, context);
+  if (typeof plain === "object" && plain.kind === "serial")
+    return fromSerialCell(plain.value, plain, context);
   return refused("bad-date", `“${cellText(cell)}” is no date.`, "Write it as 2026-03-14 14:05.");
 }
 
@@ -107,7 +97,7 @@ function timeOf(
   cell: RawCell | undefined,
   context: Context,
 ): { at: string; offset: string | null } | MomentRefusal | null {
-  const plain = withoutFormula(cell);
+  const plain = plainCell(cell);
   if (plain === null || plain === undefined || plain === "") return null;
   if (typeof plain === "string") {
     if (plain.trim() === "") return null;

@@ -72,7 +72,7 @@ export function bothReadings(text: string): { asPoint: number; asComma: number }
  * Reads a value as typed: a number with its relation and qualifier, a result below or above what could be
  * measured, or a text. A reported 0 is a number; "ND" never becomes one (formulas: reference on censored data).
  * @param decimal the file's decimal sign; null when the file does not show one
- * @example parseValue("< 0,05", "comma") // number 0.05, relation "<"
+ * @example parseValue("< 0,05", "comma").value.number // => 0.05
  */
 export function parseValue(text: string, decimal: DecimalSign | null): ValueResult {
   const trimmed = text.trim();

@@ -6,7 +6,9 @@ import type {
   RawCell,
   RawRow,
 } from "@/modules/imports/model";
-import type { MomentCells } from "@/modules/imports/rules/parse-moment";
+
+/** The cells that together say when. */
+export type MomentCells = { moment?: RawCell; date?: RawCell; time?: RawCell };
 
 /** Where each field stands, and which columns hold values; worked out once per file. */
 export type RowLayout = {
@@ -35,7 +37,8 @@ export function layoutOf(map: ColumnMap): RowLayout {
 export function plainCell(cell: RawCell | undefined): Exclude<RawCell, { kind: "formula" }> {
   if (cell === undefined) return null;
   if (cell === null || typeof cell !== "object" || cell.kind !== "formula") return cell;
-  return cell.isSerial && typeof cell.value === "number" ? { kind: "serial", value: cell.value } : cell.value;
+  if (cell.dateStyle === null || typeof cell.value !== "number") return cell.value;
+  return { kind: "serial", value: cell.value, showsTime: cell.dateStyle === "time" };
 }
 
 function plainText(value: PlainCell): string {
