@@ -27,7 +27,16 @@ function pureFiles(): string[] {
     .sort();
 }
 
-/** Evaluates an expression with a file's exports in scope. */
+const load = async (file: string) =>
+  (await import(/* @vite-ignore */ pathToFileURL(file).href)) as Record<string, unknown>;
+
+/** What an example may name: the exports of its file and, in a science module, of that module's door. */
+async function scopeOf(file: string): Promise<Record<string, unknown>> {
+  const science = /^(.*\/modules\/(?:seawater|statistics)\/)/.exec(file)?.[1];
+  return { ...(science ? await load(join(science, "index.ts")) : {}), ...(await load(file)) };
+}
+
+/** Evaluates an expression with these names in scope. */
 function evaluate(expression: string, scope: Record<string, unknown>): unknown {
   const names = Object.keys(scope);
   // The expressions stand in our own source files; a test is the one place where they are run.
@@ -51,8 +60,7 @@ describe("every @example says what the code does", () => {
     "$where:$line $text",
     async ({ file, text, expression, expected, malformed }) => {
       expect(malformed, `"${text}" is not of the form: expression // => value`).toBeUndefined();
-      const scope = (await import(/* @vite-ignore */ pathToFileURL(file).href)) as Record<string, unknown>;
-      const got = evaluate(expression, { ...scope });
+      const got = evaluate(expression, await scopeOf(file));
       expect(matches(got, expected), explain(got, expected)).toBe(true);
     },
   );

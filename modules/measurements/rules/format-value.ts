@@ -8,7 +8,7 @@ const MOST_DECIMALS = 9;
  * A number as shown: fixed decimals rounded half away from zero on its decimal digits (1.005 → "1.01"), a true
  * minus, and never "−0". `decimals` null shows as many digits as the number has, at most nine after the point.
  * Throws RangeError for a number that is not finite.
- * @example formatNumber(-1.25, 1) // "−1.3"
+ * @example formatNumber(-1.25, 1) // => "−1.3"
  */
 export function formatNumber(value: number, decimals: number | null): string {
   if (!Number.isFinite(value)) throw new RangeError("Only a finite number can be shown.");
@@ -32,7 +32,7 @@ const withoutTrailingZeros = (text: string) => (text.includes(".") ? text.replac
 /**
  * Two different numbers shown so that they look different: decimals are added (to nine) until they do. Used where a
  * sentence says that one exceeds the other.
- * @example formatPair(18.04, 18, 1) // ["18.04", "18.00"]
+ * @example formatPair(18.04, 18, 1) // => ["18.04", "18.00"]
  */
 export function formatPair(a: number, b: number, decimals: number): [string, string] {
   for (let digits = decimals; digits < MOST_DECIMALS; digits += 1) {
@@ -46,7 +46,7 @@ export function formatPair(a: number, b: number, decimals: number): [string, str
  * A reading as shown, without its unit: "8.12", "−1.3", "<0.05", "ND", ">" cases without a number by their text
  * ("TNTC"), choices and texts as they are.
  * A censored number keeps the digits it was given: "<0.05" with one decimal is not shown as "<0.1".
- * @example formatValue({ value: 0.05, qualifier: "<", text: "<0,05" }, 1) // "<0.05"
+ * @example formatValue({ value: 0.05, qualifier: "<", text: "<0,05" }, 1) // => "<0.05"
  */
 export function formatValue(reading: ReadingValue, decimals: number): string {
   if (reading.qualifier === "ND") return "ND";

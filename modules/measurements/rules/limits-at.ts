@@ -11,7 +11,7 @@ const BOUND_NAMES = [...ORDERED_BOUNDS, "greatestChange24h"] as const;
 /**
  * Which version of the limits is in force at a moment? The one that began last at or before it and has not ended;
  * of two that begin together the later version. Inclusive at its beginning, exclusive at its end.
- * @example versionInForce(versions, reading.takenAt)
+ * @example versionInForce([{ version: 1, effectiveFromAt: 0, effectiveToAt: 10 }, { version: 2, effectiveFromAt: 10, effectiveToAt: null }], 10).version // => 2
  */
 export function versionInForce(versions: readonly LimitVersion[], at: number): LimitVersion | null {
   let found: LimitVersion | null = null;
@@ -29,7 +29,7 @@ export function versionInForce(versions: readonly LimitVersion[], at: number): L
 /**
  * Which limits hold at a moment, or why none? `zone` is the facility's IANA zone; the season follows its calendar.
  * Throws RangeError for a shape without knots or an impossible month-day (`checkLimitShape` refuses both earlier).
- * @example limitsAt(versions, takenAt, "Europe/Dublin")
+ * @example limitsAt([], 0, "Europe/Dublin").state // => "none"
  */
 export function limitsAt(versions: readonly LimitVersion[], at: number, zone: string): LimitsInForce {
   const found = versionInForce(versions, at);
@@ -43,7 +43,7 @@ export function limitsAt(versions: readonly LimitVersion[], at: number, zone: st
  * The bounds of one shape at a moment. A ramp is linear between its knots and level before the first and after the
  * last; a season is linear between its days and wraps around the year, in the facility's wall time. A season's day
  * begins at 00:00; 29 February counts as 1 March in years without one.
- * @example boundsAt(ramp12To16Over92Days, start + 46 * DAY_MS, "UTC").target // 14
+ * @example boundsAt({ kind: "ramp", knots: [{ at: 0, bounds: { target: 12 } }, { at: 92, bounds: { target: 16 } }] }, 46, "UTC").target // => 14
  */
 export function boundsAt(shape: LimitShape, at: number, zone: string): Bounds {
   switch (shape.kind) {

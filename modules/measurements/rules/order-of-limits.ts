@@ -31,7 +31,7 @@ interface CheckOptions {
 /**
  * Do these limits stand in order? lower tolerance ≤ lower watch ≤ target ≤ upper watch ≤ upper tolerance, any of them
  * left open; the change positive; all inside the plausible bounds. Answers every problem found, none when all is well.
- * @example checkBounds({ watchHigh: 19, toleranceHigh: 18 })[0].code // "wrong-order"
+ * @example checkBounds({ watchHigh: 19, toleranceHigh: 18 })[0].code // => "wrong-order"
  */
 export function checkBounds(bounds: Bounds, options: CheckOptions = {}): LimitProblem[] {
   const show = (value: number) => formatNumber(value, options.decimals ?? null);

@@ -28,7 +28,7 @@ export function tidy(text: string): string {
  * Which number was typed? Point or comma, a true minus, groups of three set apart by blanks, apostrophes, or by
  * the separator that is not the decimal one. "1,234" can be 1.234 or 1234: it is refused with a question unless
  * the separator is declared. A point alone is always decimal ("1.026" is a specific gravity).
- * @example parseNumber("−1,5") // { ok: true, value: -1.5 }
+ * @example parseNumber("−1,5") // => { ok: true, value: -1.5 }
  */
 export function parseNumber(typed: string, separator: DecimalSeparator = "auto"): ParsedNumber {
   const text = tidy(typed);

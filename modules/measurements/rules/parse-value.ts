@@ -35,7 +35,7 @@ const NO = new Set(["no", "n", "false", "0", "off", "✗"]);
  * ND has no number (never 0 and never half a limit); TNTC is ">" without a number; a reported 0 is the number 0.
  * Refuses with a sentence that says what to write instead.
  * Source for keeping qualifier and number apart: EPA data qualifiers (U, J, R), reference notes on censored data.
- * @example parseValue("<0,05", { kind: "number" }) // { ok: true, qualifier: "<", value: 0.05, text: "<0,05" }
+ * @example parseValue("<0,05", { kind: "number" }) // => { ok: true, qualifier: "<", value: 0.05, text: "<0,05" }
  */
 export function parseValue(
   typed: string,

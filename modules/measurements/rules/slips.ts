@@ -55,7 +55,7 @@ interface Band {
  * (÷10, ×10, ÷100, ×100), or another accepted unit, that would land inside the band. The nearest to the middle of the
  * band comes first. The band is the median ± five robust deviations of at least five recent values, else the limits
  * where both sides are given; without either nothing is suggested. A value inside the band is never doubted.
- * @example suggestSlips({ typed: 81.2, recent: [8.1, 8.12, 8.09, 8.11, 8.1], … })[0].value // 8.12
+ * @example suggestSlips({ typed: 81.2, typedUnit: null, canonicalUnit: null, acceptedUnits: [], decimals: 2, recent: [8.1, 8.12, 8.09, 8.11, 8.1], bounds: null, plausible: { low: 4, high: 11 } })[0].value // => 8.12
  */
 export function suggestSlips(input: SlipInput): Slip[] {
   const band = usualBand(input);

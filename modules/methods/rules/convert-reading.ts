@@ -45,7 +45,7 @@ const MEETING_UNIT = { salinity: "psu", alkalinity: "meq/L" } as const;
  * per kilogram goes through the density at the sample's salinity and temperature.
  * Never throws for a reading: answers what is missing or outside the formulas' range.
  * Source and Checked: modules/seawater; the pairs in tests/published/reading-conversions.test.ts.
- * @example convertReading(1.026, "SG 25/25 °C", "psu") // { ok: true, value: 34.508… }
+ * @example convertReading(1.026, "SG 25/25 °C", "psu") // => { ok: true, value: 34.508 }
  */
 export function convertReading(
   value: number,

@@ -11,7 +11,7 @@ export type SegmentArea = { areaM2: number; perDepthM: number; perDiameterM: num
  * Source: circular segment, Bronshtein & Semendyayev, Handbook of Mathematics, plane geometry (circle).
  * Checked: half, full and 60° segments in tests/published/volume-lying-cylinder.test.ts.
  *
- * @example circularSegment(2, 1).areaM2 // 1.5707963267948966
+ * @example circularSegment(2, 1).areaM2 // => 1.5707963267948966
  */
 export function circularSegment(diameterM: number, depthM: number): SegmentArea {
   if (!(diameterM > 0)) throw new RangeError("The diameter must be more than 0 m.");

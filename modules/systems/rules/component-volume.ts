@@ -37,7 +37,7 @@ export class ComponentRangeError extends RangeError {
  * Source: solids, Bronshtein & Semendyayev, Handbook of Mathematics (geometry); uncertainty, GUM.
  * Checked: tests/published/volume-*.test.ts.
  *
- * @example componentVolume({ name: "tank", shape: "box", lengthM: { value: 2, standardUncertainty: 0 }, widthM: { value: 1, standardUncertainty: 0 }, heightM: { value: 1, standardUncertainty: 0 }, fillDepthM: { value: 0.5, standardUncertainty: 0 }, displacementL: null, isAtSurface: true }).volumeL // 1000
+ * @example componentVolume({ name: "tank", shape: "box", lengthM: { value: 2, standardUncertainty: 0 }, widthM: { value: 1, standardUncertainty: 0 }, heightM: { value: 1, standardUncertainty: 0 }, fillDepthM: { value: 0.5, standardUncertainty: 0 }, displacementL: null, isAtSurface: true }).volumeL // => 1000
  */
 export function componentVolume(component: VolumeComponent): ComponentVolume {
   const inputs = inputsOf(component);

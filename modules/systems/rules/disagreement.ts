@@ -21,7 +21,7 @@ export type Disagreement = {
  * Source: the zeta score of ISO 13528 with its warning bound of 2 (the standard's clause on zeta scores).
  * Checked: tests/published/volume-disagreement.test.ts.
  *
- * @example disagreement({ value: 1000, standardUncertainty: 3 }, { value: 1010, standardUncertainty: 4 }).ratio // 2
+ * @example disagreement({ value: 1000, standardUncertainty: 3 }, { value: 1010, standardUncertainty: 4 }).ratio // => 2
  */
 export function disagreement(first: Measured, second: Measured): Disagreement {
   for (const { value, standardUncertainty } of [first, second]) {

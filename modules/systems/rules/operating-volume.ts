@@ -24,7 +24,7 @@ export class BelowFloorError extends RangeError {
  * Units: litres, square metres, metres. Domain: finite numbers, area ≥ 0, known area when Δh ≠ 0, result ≥ 0;
  * RangeError outside it. Source: JCGM 100:2008 (GUM), 5.1.2. Checked: tests/published/volume-operating.test.ts.
  *
- * @example operatingVolume({ value: 5000, standardUncertainty: 30 }, { value: 4, standardUncertainty: 0 }, { levelOffsetM: { value: -0.25, standardUncertainty: 0.01 }, isDrained: false }) // { value: 4000, standardUncertainty: 50 }
+ * @example operatingVolume({ value: 5000, standardUncertainty: 30 }, { value: 4, standardUncertainty: 0 }, { levelOffsetM: { value: -0.25, standardUncertainty: 0.01 }, isDrained: false }) // => { value: 4000, standardUncertainty: 50 }
  */
 export function operatingVolume(
   recordL: Measured,
@@ -62,7 +62,7 @@ export function operatingVolume(
  * How much water do systems hold that are joined into one body of water? The sum, uncorrelated (GUM 5.1.2). Litres.
  * Domain: at least one system; RangeError outside it.
  *
- * @example joinedVolume([{ value: 1000, standardUncertainty: 3 }, { value: 500, standardUncertainty: 4 }]) // { value: 1500, standardUncertainty: 5 }
+ * @example joinedVolume([{ value: 1000, standardUncertainty: 3 }, { value: 500, standardUncertainty: 4 }]) // => { value: 1500, standardUncertainty: 5 }
  */
 export function joinedVolume(volumesL: readonly Measured[]): Measured {
   if (volumesL.length === 0) throw new RangeError("Joining needs at least one system.");
@@ -77,7 +77,7 @@ export function joinedVolume(volumesL: readonly Measured[]): Measured {
  * Which systems share one body of water? Everything reachable over joins, in either direction, the start included,
  * ascending by id; a join is a pair of system ids.
  *
- * @example joinedSystems(1, [[1, 2], [3, 2], [4, 5]]) // [1, 2, 3]
+ * @example joinedSystems(1, [[1, 2], [3, 2], [4, 5]]) // => [1, 2, 3]
  */
 export function joinedSystems(startId: number, joins: readonly (readonly [number, number])[]): number[] {
   const found = new Set([startId]);

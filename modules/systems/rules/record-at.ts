@@ -11,7 +11,7 @@ type Candidate = {
  * Which determination is the volume of record at a moment? The approved one that took effect last, at or before it; of
  * two that took effect together, the one approved later. Null where none had taken effect.
  *
- * @example recordAt([{ id: 1, status: "approved", effectiveFromAt: 10, decidedAt: 12 }], 9) // null
+ * @example recordAt([{ id: 1, status: "approved", effectiveFromAt: 10, decidedAt: 12 }], 9) // => null
  */
 export function recordAt<D extends Candidate>(determinations: readonly D[], at: number): D | null {
   const inForce = determinations.filter((one) => one.status === "approved" && one.effectiveFromAt <= at);

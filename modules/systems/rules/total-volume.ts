@@ -11,7 +11,7 @@ import { COVERAGE_FACTOR, combineCorrelated } from "./uncertainty";
  * Source: JCGM 100:2008 (GUM), 5.1.2, 5.2.2, 6.2.
  * Checked: tests/published/volume-uncertainty.test.ts.
  *
- * @example totalVolume([{ name: "pipework", shape: "free-litres", volumeL: { value: 40, standardUncertainty: 4 }, fillDepthM: null, displacementL: null, isAtSurface: false }]).expandedUncertaintyL // 8
+ * @example totalVolume([{ name: "pipework", shape: "free-litres", volumeL: { value: 40, standardUncertainty: 4 }, fillDepthM: null, displacementL: null, isAtSurface: false }]).expandedUncertaintyL // => 8
  */
 export function totalVolume(components: readonly VolumeComponent[], correlation = 0): TotalVolume {
   if (components.length === 0) throw new RangeError("A volume needs at least one component.");

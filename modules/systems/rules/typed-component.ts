@@ -15,9 +15,9 @@ const NUMBER = /^[+-]?(\d+([.,]\d*)?|[.,]\d+)$/;
 /**
  * What number was typed? Comma or point for the decimals; blanks between figures are left out; null where it is no number.
  *
- * @example readDecimal("2,5") // 2.5
- * @example readDecimal("12 000") // 12000
- * @example readDecimal("1e3") // null
+ * @example readDecimal("2,5") // => 2.5
+ * @example readDecimal("12 000") // => 12000
+ * @example readDecimal("1e3") // => null
  */
 export function readDecimal(text: string): number | null {
   const plain = text

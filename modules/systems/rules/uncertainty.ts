@@ -13,7 +13,7 @@ export type Contribution = { sensitivity: number; standardUncertainty: number };
  * Source: JCGM 100:2008 (GUM), 5.1.2, equation (10).
  * Checked: the GUM's product case, 5.1.6, in tests/published/volume-uncertainty.test.ts.
  *
- * @example combineUncorrelated([{ sensitivity: 1, standardUncertainty: 3 }, { sensitivity: 2, standardUncertainty: 2 }]) // 5
+ * @example combineUncorrelated([{ sensitivity: 1, standardUncertainty: 3 }, { sensitivity: 2, standardUncertainty: 2 }]) // => 5
  */
 export function combineUncorrelated(contributions: readonly Contribution[]): number {
   return Math.hypot(...contributions.map(contributionOf));
@@ -27,7 +27,7 @@ export function combineUncorrelated(contributions: readonly Contribution[]): num
  * Source: JCGM 100:2008 (GUM), 5.2.2, equation (16); r = 1 is its note 1.
  * Checked: the GUM's ten resistors in series, 5.2.2 example, in tests/published/volume-uncertainty.test.ts.
  *
- * @example combineCorrelated([3, 4], 1) // 7
+ * @example combineCorrelated([3, 4], 1) // => 7
  */
 export function combineCorrelated(standardUncertainties: readonly number[], correlation: number): number {
   if (!(correlation >= 0 && correlation <= 1)) {
