@@ -24,6 +24,6 @@ export {
   listPersonNames,
 } from "./queries/list-people";
 export { hashPassword } from "./rules/password";
-export { actorOf, findSession, type SessionLookup, touchSession } from "./sessions/actor";
+export { actorOf, endEverySession, findSession, type SessionLookup, touchSession } from "./sessions/actor";
 export { askForReset, changeOwnPassword, confirmPassword, setPasswordByLink } from "./sessions/passwords";
 export { type SignIn, signIn } from "./sessions/sign-in";

@@ -1,9 +1,10 @@
 import { and, eq, isNull } from "drizzle-orm";
-import type { Orm } from "@/db/database";
+import type { Database, Orm } from "@/db/database";
 import { HOUR_MS, MINUTE_MS } from "@/lib/clock";
 import { settings } from "@/lib/env";
 import { epochToLocal } from "@/lib/zone";
 import type { Actor } from "@/modules/access";
+import { upkeep } from "@/modules/audit";
 import { boundAreas, deputyRoles, ownRoles } from "../people";
 import { secretHash } from "../rules/secret";
 import { person, session } from "../schema";
@@ -59,4 +60,9 @@ export function touchSession(orm: Orm, sessionId: string, seenAt: number, at: nu
     .set({ seenAt: at })
     .where(and(eq(session.id, sessionId), isNull(session.endedAt)))
     .run();
+}
+
+/** Ends every session there is: after a restore, sessions that had ended since the backup must not come back. */
+export function endEverySession(db: Database, at: number): void {
+  upkeep(db, (orm) => orm.update(session).set({ endedAt: at }).where(isNull(session.endedAt)).run());
 }

@@ -24,7 +24,10 @@ export function AccessPanel({ person, viewerId }: AccessPanelProps) {
     <Panel title="Coming in">
       <p>{SAYS[person.state]}</p>
       {person.suspendedReason !== null && <p className="mt-1 text-ink-2">Reason: {person.suspendedReason}</p>}
-      <div className="mt-4 flex flex-wrap gap-2.5">
+      {person.id === viewerId && (
+        <p className="mt-1 text-ink-2">This is you. Only another administrator can shut you out.</p>
+      )}
+      <div className="mt-4 flex flex-wrap gap-2.5 empty:hidden">
         {person.state === "invited" && (
           <Button
             busy={busy}

@@ -141,13 +141,7 @@ function GrantForm({ options, isOwn, busy, onGrant }: GrantFormProps) {
         if (role !== "") void onGrant(role).then((given) => given && setRole(""));
       }}
     >
-      <Field
-        label="Give a role"
-        name="role"
-        required
-        className="min-w-56 grow"
-        hint={isOwn ? "A role for yourself works once another administrator has approved it." : undefined}
-      >
+      <Field label="Give a role" name="role" required className="min-w-56 grow">
         <Select
           placeholder="Choose a role"
           options={options}
@@ -159,6 +153,11 @@ function GrantForm({ options, isOwn, busy, onGrant }: GrantFormProps) {
       <Button type="submit" busy={busy} busyText="Giving …">
         Give
       </Button>
+      {isOwn && (
+        <p className="basis-full text-sm text-ink-3">
+          A role for yourself works once another administrator has approved it.
+        </p>
+      )}
     </form>
   );
 }
