@@ -1,9 +1,11 @@
 import "server-only";
-import type { ReactionTable, WorkTable } from "@/modules/audit";
+import { backUpTask, type ReactionTable, type WorkTable } from "@/modules/audit";
+import { judgeSeriesAgain } from "@/modules/measurements";
 import { deliverMail } from "@/modules/notifications";
+import { dailyCheckpoint } from "@/modules/signoff";
 
 /** Event → the work that follows it after COMMIT. The only way in which something goes up the floors. */
 export const REACTIONS: ReactionTable = {};
 
 /** Everything that the job runner can carry out by name. */
-export const WORK: WorkTable = [deliverMail];
+export const WORK: WorkTable = [deliverMail, dailyCheckpoint, backUpTask, judgeSeriesAgain];

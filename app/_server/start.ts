@@ -1,19 +1,23 @@
 import "server-only";
 import { database } from "@/db/database";
+import { markServing } from "@/db/server-mark";
 import { systemClock } from "@/lib/clock";
 import { settings } from "@/lib/env";
 import { log } from "@/lib/log";
 import { processSingleton } from "@/lib/process-singleton";
 import { JobRunner, migrateDatabase } from "@/modules/audit";
+import { scheduleCheckpoint } from "@/modules/signoff";
 import { WORK } from "./reactions";
 import { prepareRuntime } from "./runtime";
 
 /** Start-up of the server: settings (refuses unsafe ones), the newest schema, the job runner. */
 export function start(): void {
-  const { databaseFile, STILLWELL_JOBS } = settings();
+  const { databaseFile, dataFolder, STILLWELL_JOBS } = settings();
   const { migrated } = migrateDatabase(database(), systemClock);
   prepareRuntime();
+  markServing(dataFolder);
   if (STILLWELL_JOBS) {
+    scheduleCheckpoint(database(), systemClock);
     processSingleton("jobs", () => {
       const runner = new JobRunner(database(), systemClock, WORK);
       runner.start();
