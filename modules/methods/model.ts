@@ -69,3 +69,71 @@ export interface FacilityParameter extends ParameterDefinition {
   readonly id: number;
   readonly isRetired: boolean;
 }
+
+/** Where an instrument stands with its checks today. */
+export const CHECK_STATES = ["not-checked-by-date", "never-checked", "failed", "overdue", "due"] as const;
+export type CheckState = (typeof CHECK_STATES)[number];
+
+/** When the next check is due ("YYYY-MM-DD"; null where none is), and how that stands today. */
+export interface CheckDue {
+  readonly state: CheckState;
+  readonly dueOn: string | null;
+  /** A check is missing: never made where one is asked for, failed, or its day has passed. */
+  readonly isOverdue: boolean;
+}
+
+/** A method as lists and forms know it. */
+export interface MethodRow {
+  readonly id: number;
+  readonly code: string;
+  readonly name: string;
+  readonly parameterId: number;
+  readonly parameterName: string;
+  readonly principle: string;
+  readonly isRetired: boolean;
+}
+
+/** One check of an instrument. Numbers are in `unit`, as typed. */
+export interface InstrumentCheckRow {
+  readonly id: number;
+  readonly parameterId: number | null;
+  readonly parameterName: string | null;
+  readonly checkedAt: number;
+  readonly checkedBy: number;
+  readonly standard: string;
+  readonly standardValue: number | null;
+  readonly asFound: number | null;
+  readonly asLeft: number | null;
+  readonly unit: string | null;
+  readonly verdict: CheckVerdict;
+  readonly note: string;
+  readonly dueOn: string | null;
+}
+
+/** An instrument with its newest check. */
+export interface InstrumentRow {
+  readonly id: number;
+  readonly code: string;
+  readonly name: string;
+  readonly serial: string;
+  readonly principle: string;
+  readonly scale: string | null;
+  readonly state: InstrumentState;
+  readonly checkEveryDays: number | null;
+  readonly retiredReason: string | null;
+  readonly lastCheck: InstrumentCheckRow | null;
+  readonly due: CheckDue;
+}
+
+/** An instrument with all its checks, newest first. */
+export interface InstrumentDetail extends InstrumentRow {
+  readonly checks: readonly InstrumentCheckRow[];
+}
+
+export {
+  ANSWER_MEANING_WORDS,
+  CHECK_VERDICT_WORDS,
+  INSTRUMENT_STATE_WORDS,
+  PARAMETER_GROUP_WORDS,
+  PARAMETER_KIND_WORDS,
+} from "./words.data";
