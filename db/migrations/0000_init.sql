@@ -348,6 +348,51 @@ CREATE TABLE `notifications_mail` (
 );
 --> statement-breakpoint
 CREATE INDEX `notifications_mail_queued` ON `notifications_mail` (`queued_at`);--> statement-breakpoint
+CREATE TABLE `quality_incident` (
+	`id` integer PRIMARY KEY NOT NULL,
+	`code` text NOT NULL,
+	`system_id` integer NOT NULL,
+	`point_id` integer,
+	`parameter_id` integer,
+	`title` text NOT NULL,
+	`state` text NOT NULL,
+	`owner_id` integer NOT NULL,
+	`began_at` integer NOT NULL,
+	`opened_at` integer NOT NULL,
+	`opened_by` integer NOT NULL,
+	`recheck_due_at` integer,
+	`recheck_reading_id` integer,
+	`closed_at` integer,
+	`closed_by` integer,
+	`closure_text` text,
+	`still_off_reason` text
+);
+--> statement-breakpoint
+CREATE UNIQUE INDEX `quality_incident_code` ON `quality_incident` (`code`);--> statement-breakpoint
+CREATE UNIQUE INDEX `quality_incident_one_open` ON `quality_incident` (`point_id`,`parameter_id`) WHERE "quality_incident"."state" <> 'closed' and "quality_incident"."point_id" is not null;--> statement-breakpoint
+CREATE INDEX `quality_incident_state` ON `quality_incident` (`state`,`recheck_due_at`);--> statement-breakpoint
+CREATE INDEX `quality_incident_system` ON `quality_incident` (`system_id`);--> statement-breakpoint
+CREATE TABLE `quality_incident_note` (
+	`id` integer PRIMARY KEY NOT NULL,
+	`incident_id` integer NOT NULL,
+	`text` text NOT NULL,
+	`noted_by` integer NOT NULL,
+	`noted_at` integer NOT NULL,
+	FOREIGN KEY (`incident_id`) REFERENCES `quality_incident`(`id`) ON UPDATE no action ON DELETE no action
+);
+--> statement-breakpoint
+CREATE INDEX `quality_incident_note_incident` ON `quality_incident_note` (`incident_id`);--> statement-breakpoint
+CREATE TABLE `quality_incident_reading` (
+	`id` integer PRIMARY KEY NOT NULL,
+	`incident_id` integer NOT NULL,
+	`reading_id` integer NOT NULL,
+	`joined_by` integer NOT NULL,
+	`joined_at` integer NOT NULL,
+	FOREIGN KEY (`incident_id`) REFERENCES `quality_incident`(`id`) ON UPDATE no action ON DELETE no action
+);
+--> statement-breakpoint
+CREATE UNIQUE INDEX `quality_incident_reading_once` ON `quality_incident_reading` (`reading_id`);--> statement-breakpoint
+CREATE INDEX `quality_incident_reading_incident` ON `quality_incident_reading` (`incident_id`);--> statement-breakpoint
 CREATE TABLE `rounds_day_review` (
 	`id` integer PRIMARY KEY NOT NULL,
 	`area_id` integer NOT NULL,

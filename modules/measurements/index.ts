@@ -10,6 +10,7 @@ export { proposeLimits } from "./commands/propose-limits";
 export { recordReadings } from "./commands/record-readings";
 export { saveLimitTemplate } from "./commands/save-limit-template";
 export { measurementsEvents } from "./events";
+export { addExplanation, getInForce } from "./explanations";
 export { readTypedValue } from "./intake";
 export { limitsInForce } from "./limits";
 export { getLimitWorkbook, listLimits, listLimitTemplates, listLimitWorkbooks } from "./queries/list-limits";

@@ -1,6 +1,7 @@
 import type { FacilityParameter, ParameterKind, PlausibleBounds } from "@/modules/methods/model";
 
 export type { ParameterKind, PlausibleBounds };
+export { formatNumber, formatValue } from "./rules/format-value";
 
 /** The server's judgement of a reading; codes as stored, words in `STATUS_WORDS`. */
 export const STATUSES = ["within", "watch", "out", "implausible", "unjudged", "none"] as const;

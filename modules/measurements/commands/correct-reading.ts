@@ -1,25 +1,17 @@
 import { and, eq } from "drizzle-orm";
 import { invariant } from "@/lib/invariant";
-import { notFound, Problem } from "@/lib/problem";
+import { Problem } from "@/lib/problem";
 import type { Orm } from "@/db/database";
 import { defineCommand } from "@/modules/audit";
 import { getParameter } from "@/modules/methods";
 import { measurementsMay } from "../abilities";
 import { measurementsEvents } from "../events";
+import { addExplanation, getInForce } from "../explanations";
 import { confirmReadingInput, correctReadingInput, explainReadingInput, voidReadingInput } from "../input";
 import { judgeWithDependents, readTypedValue } from "../intake";
 import { judgeDependents } from "../judge";
 import { areasOfPoints } from "../points";
-import { explanation, reading, readingInForce } from "../schema";
-
-/** A reading that counts now. @throws Problem `not-found`, `conflict` where it has been corrected or struck out. */
-function getInForce(db: Orm, readingId: number) {
-  const row = db.select().from(reading).where(eq(reading.id, readingId)).get();
-  if (!row) throw notFound("such reading");
-  const counts = db.select({ id: readingInForce.id }).from(readingInForce).where(eq(readingInForce.id, readingId)).get();
-  if (!counts) throw new Problem("conflict", "This reading has been corrected, struck out or withdrawn; look at the newest one.");
-  return row;
-}
+import { reading } from "../schema";
 
 function areaOf(ctx: { db: Orm }, { readingId }: { readingId: number }): number[] {
   const row = ctx.db.select({ pointId: reading.pointId }).from(reading).where(eq(reading.id, readingId)).get();
@@ -124,15 +116,9 @@ export const explainReading = defineCommand({
   input: explainReadingInput,
   areas: areaOf,
   run(ctx, { readingId, text }) {
-    invariant(ctx.actor.personId !== null, "a person explains a reading");
-    getInForce(ctx.db, readingId);
-    const added = ctx.db
-      .insert(explanation)
-      .values({ readingId, text, explainedBy: ctx.actor.personId, explainedAt: ctx.at })
-      .returning({ id: explanation.id })
-      .get();
+    const explanationId = addExplanation(ctx, { readingId, text });
     return {
-      result: { explanationId: added.id },
+      result: { explanationId },
       event: { kind: measurementsEvents.explained, subject: { type: "reading", id: readingId } },
     };
   },

@@ -1,0 +1,4 @@
+import { query } from "@/app/_server/handle";
+import { getDaySheet } from "@/modules/rounds";
+
+export const GET = query(getDaySheet);
