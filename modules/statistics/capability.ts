@@ -69,7 +69,8 @@ export function cpInterval(input: {
   readonly n: number;
   readonly confidence?: number;
 }): Interval {
-  const { cp, confidence = 0.95 } = input;
+  const { confidence = 0.95 } = input;
+  const cp = requireFinite(input.cp, "cp");
   const df = requireSample(input.n) - 1;
   const tail = (1 - requireProbability(confidence, "confidence")) / 2;
   return {
@@ -89,7 +90,8 @@ export function cpkInterval(input: {
   readonly n: number;
   readonly confidence?: number;
 }): Interval {
-  const { cpk, confidence = 0.95 } = input;
+  const { confidence = 0.95 } = input;
+  const cpk = requireFinite(input.cpk, "cpk");
   const n = requireSample(input.n);
   const z = normalQuantile(1 - (1 - requireProbability(confidence, "confidence")) / 2);
   const half = z * Math.sqrt(1 / (9 * n) + (cpk * cpk) / (2 * (n - 1)));

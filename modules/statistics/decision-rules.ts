@@ -44,8 +44,11 @@ export function acceptanceLimit(input: {
   readonly expanded: number;
   readonly guard: number;
 }): number {
+  if (!(Number.isFinite(input.guard) && input.guard >= 0))
+    throw new RangeError("The guard band must be zero or more.");
   const band = input.guard * requirePositive(input.expanded, "expanded");
-  return input.side === "upper" ? input.limit - band : input.limit + band;
+  const limit = requireFinite(input.limit, "limit");
+  return input.side === "upper" ? limit - band : limit + band;
 }
 
 /**
@@ -104,7 +107,8 @@ export function conformanceProbability(input: {
   readonly lower?: number;
   readonly upper?: number;
 }): number {
-  const { value, lower, upper } = input;
+  const { lower, upper } = input;
+  const value = requireFinite(input.value, "value");
   const u = requirePositive(input.u, "u");
   if (lower === undefined && upper === undefined)
     throw new RangeError("A lower or an upper limit is needed.");
@@ -137,7 +141,9 @@ export function globalRisks(input: {
   readonly limit: number;
   readonly acceptance: number;
 }): GlobalRisks {
-  const { priorMean, limit, acceptance } = input;
+  const priorMean = requireFinite(input.priorMean, "priorMean");
+  const limit = requireFinite(input.limit, "limit");
+  const acceptance = requireFinite(input.acceptance, "acceptance");
   const priorSd = requirePositive(input.priorSd, "priorSd");
   const u = requirePositive(input.u, "u");
   const far = 9 * priorSd;

@@ -24,6 +24,10 @@ export interface EwmaChart {
   readonly signals: readonly number[];
 }
 
+function requireLambda(lambda: number): void {
+  if (!(lambda > 0 && lambda <= 1)) throw new RangeError("lambda must be above 0 and at most 1.");
+}
+
 /**
  * Half the width between the limits of an EWMA chart at its point number t = 1, 2, ...: width * sigma *
  * sqrt(lambda / (2 - lambda) * (1 - (1 - lambda)^(2t))). Infinity for t gives the asymptotic limit.
@@ -35,7 +39,11 @@ export function ewmaHalfWidth(input: {
   readonly width: number;
   readonly point: number;
 }): number {
-  const { lambda, sigma, width, point } = input;
+  const { lambda, point } = input;
+  requireLambda(lambda);
+  const sigma = requirePositive(input.sigma, "sigma");
+  const width = requirePositive(input.width, "width");
+  if (!(point >= 1)) throw new RangeError("Points are counted from 1.");
   return width * sigma * Math.sqrt((lambda / (2 - lambda)) * (1 - (1 - lambda) ** (2 * point)));
 }
 
@@ -51,7 +59,7 @@ export function ewmaHalfWidth(input: {
 export function ewmaChart(input: EwmaInput): EwmaChart {
   const { values, lambda, centre, sigma, width = 3, start = centre, limits = "exact" } = input;
   const n = requireValues(values, 1);
-  if (!(lambda > 0 && lambda <= 1)) throw new RangeError("lambda must be above 0 and at most 1.");
+  requireLambda(lambda);
   requirePositive(sigma, "sigma");
   requirePositive(width, "width");
   requireFinite(centre, "centre");

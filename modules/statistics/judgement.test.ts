@@ -211,3 +211,19 @@ describe("decisions and scores", () => {
     expect(() => enScore({ result: 1, assigned: 1, expanded: 0, expandedAssigned: 0 })).toThrow(RangeError);
   });
 });
+
+describe("what is not a number is refused, never passed on", () => {
+  const none = Number.NaN;
+  it.each<[string, () => unknown]>([
+    ["a score without an assigned value", () => zScore({ result: 1, assigned: none, sigma: 1 })],
+    ["a chance without a value", () => conformanceProbability({ value: none, u: 1, upper: 2 })],
+    ["a decision without a limit", () => decide({ value: 1, limit: none, side: "upper", expanded: 1 })],
+    [
+      "risks without a prior",
+      () => globalRisks({ priorMean: none, priorSd: 1, u: 1, limit: 1, acceptance: 1 }),
+    ],
+    ["a trend without a season", () => seasonalMannKendall({ values: [1, 2], seasons: [none, none] })],
+    ["an outlier test", () => grubbsTest({ values: [1, 2, none] })],
+    ["an expanded uncertainty", () => expandedUncertainty({ u: none, df: 5, confidence: 0.95 })],
+  ])("%s", (_name, ask) => expect(ask).toThrow(RangeError));
+});

@@ -41,6 +41,7 @@ export function seasonalMannKendall(input: {
   const { values, seasons } = input;
   const n = requireValues(values, 2);
   if (seasons.length !== n) throw new RangeError("Every value needs its season.");
+  requireValues(seasons, n, "seasons");
   const bySeason = new Map<number, number[]>();
   for (let i = 0; i < n; i++) {
     const series = bySeason.get(seasons[i]!) ?? [];

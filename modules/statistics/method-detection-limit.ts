@@ -90,6 +90,8 @@ export function detectionLimitMayStay(input: {
 }): boolean {
   const { standing, fresh, shareOfBlanksAbove } = input;
   if (!(standing > 0 && fresh > 0)) throw new RangeError("Both limits must be greater than zero.");
+  if (!(shareOfBlanksAbove >= 0 && shareOfBlanksAbove <= 1))
+    throw new RangeError("A share lies between 0 and 1.");
   const ratio = fresh / standing;
   return ratio >= 0.5 && ratio <= 2 && shareOfBlanksAbove < 0.03;
 }

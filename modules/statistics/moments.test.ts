@@ -74,8 +74,8 @@ describe("quantiles and robust estimates", () => {
     fc.assert(
       fc.property(values, fc.double({ min: 0, max: 1, noNaN: true }), (series, p) => {
         expect(quantile(series, p)).toBeGreaterThanOrEqual(quantile(series, p / 2) - 1e-9);
-        expect(quantile(series, 0)).toBe(Math.min(...series));
-        expect(quantile(series, 1)).toBe(Math.max(...series));
+        expect(quantile(series, 0)).toBeCloseTo(Math.min(...series), 12);
+        expect(quantile(series, 1)).toBeCloseTo(Math.max(...series), 12);
       }),
     );
     expect(() => quantile([1], 1.5)).toThrow(RangeError);

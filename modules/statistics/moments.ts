@@ -1,4 +1,4 @@
-import { requireValues, type Values } from "./values";
+import { requireFinite, requireValues, type Values } from "./values";
 
 /**
  * The sum of a series with Neumaier's compensation, so that small terms beside large ones are not lost.
@@ -27,7 +27,7 @@ export function sum(values: Values): number {
  */
 export function mean(values: Values): number {
   const n = requireValues(values, 1);
-  const first = sum(values) / n;
+  const first = requireFinite(sum(values) / n, "The mean");
   let rest = 0;
   for (let i = 0; i < n; i++) rest += values[i]! - first;
   return first + rest / n;
@@ -59,7 +59,7 @@ function sumOfSquares(values: Values, centre: number): number {
  */
 export function variance(values: Values): number {
   const n = requireValues(values, 2);
-  return Math.max(0, sumOfSquares(values, mean(values))) / (n - 1);
+  return requireFinite(Math.max(0, sumOfSquares(values, mean(values))) / (n - 1), "The variance");
 }
 
 /**

@@ -14,7 +14,8 @@ export function zScore(input: {
   readonly assigned: number;
   readonly sigma: number;
 }): number {
-  return (requireFinite(input.result, "result") - input.assigned) / requirePositive(input.sigma, "sigma");
+  const off = requireFinite(input.result, "result") - requireFinite(input.assigned, "assigned");
+  return off / requirePositive(input.sigma, "sigma");
 }
 
 /**
@@ -30,7 +31,7 @@ export function zetaScore(input: {
   readonly uAssigned: number;
 }): number {
   const both = requirePositive(Math.hypot(input.u, input.uAssigned), "The combined uncertainty");
-  return (requireFinite(input.result, "result") - input.assigned) / both;
+  return (requireFinite(input.result, "result") - requireFinite(input.assigned, "assigned")) / both;
 }
 
 /**

@@ -1,4 +1,4 @@
-import { requirePositive, type Values } from "./values";
+import { requireFinite, requirePositive, type Values } from "./values";
 
 /**
  * A point within this many sigma of a line counts as on it, so that a converted value such as 64.4 degF = 18 degC does
@@ -27,6 +27,7 @@ export function standardise(input: {
   readonly missing: MissingConvention;
 }): Standardised {
   const { values, centre, sigma, missing } = input;
+  requireFinite(centre, "centre");
   requirePositive(sigma, "sigma");
   const n = values.length;
   const z = new Float64Array(n);

@@ -138,7 +138,8 @@ export function expandedUncertainty(input: {
   readonly confidence: number;
   readonly wholeDf?: "truncate" | "keep";
 }): { readonly k: number; readonly expanded: number; readonly df: number } {
-  const { u, confidence, wholeDf = "truncate" } = input;
+  const { confidence, wholeDf = "truncate" } = input;
+  const u = requireFinite(input.u, "u");
   if (!(input.df >= 1)) throw new RangeError("Degrees of freedom below 1 give no expanded uncertainty.");
   const df = wholeDf === "truncate" && Number.isFinite(input.df) ? Math.floor(input.df) : input.df;
   const p = 1 - (1 - requireProbability(confidence, "confidence")) / 2;
@@ -146,12 +147,18 @@ export function expandedUncertainty(input: {
   return { k, expanded: k * u, df };
 }
 
+function requireHalfWidth(halfWidth: number): number {
+  if (!(Number.isFinite(halfWidth) && halfWidth >= 0))
+    throw new RangeError("halfWidth must be zero or more.");
+  return halfWidth;
+}
+
 /** Standard uncertainty of limits +-a within which every value is as likely as another: a / sqrt 3. */
 export function rectangularUncertainty(halfWidth: number): number {
-  return requireFinite(halfWidth, "halfWidth") / Math.sqrt(3);
+  return requireHalfWidth(halfWidth) / Math.sqrt(3);
 }
 
 /** Standard uncertainty of limits +-a within which values near the middle are likelier: a / sqrt 6. */
 export function triangularUncertainty(halfWidth: number): number {
-  return requireFinite(halfWidth, "halfWidth") / Math.sqrt(6);
+  return requireHalfWidth(halfWidth) / Math.sqrt(6);
 }
