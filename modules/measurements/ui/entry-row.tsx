@@ -1,0 +1,154 @@
+"use client";
+import { type ReactNode, useId } from "react";
+import { agoText, Quantity, WellStrip } from "@/lib/ui";
+import { unitLabel } from "@/lib/units/factors";
+import type { RecentReading } from "../model";
+import { AnswerButtons, answersOf } from "./answer-buttons";
+import { EntryBox } from "./entry-box";
+import { EntryNotes } from "./entry-notes";
+import { statusOf } from "./hand-over";
+import { inUnit } from "./judge-typed";
+import type { EntryCell } from "./use-entry";
+
+interface EntryRowProps {
+  entry: EntryCell;
+  /** What stands before the parameter's name for those who do not see the page: system and point. */
+  place: string;
+  now: number;
+  zone: string;
+  onEnter: (from: HTMLElement) => void;
+  renderIncidentLink?: ((readingId: number) => ReactNode) | undefined;
+}
+
+/** One thing to read: its name and last value, the well strip, the box, and what is to be said about it. */
+export function EntryRow({ entry, place, now, zone, onEnter, renderIncidentLink }: EntryRowProps) {
+  const { row, isOpen, cell } = entry;
+  const { kind, name } = row.parameter;
+  const notes = useId();
+  const isAnswer = kind === "choice" || kind === "yes-no";
+  const isNumber = kind === "number" || kind === "count";
+  const label = `${place}, ${name}`;
+  const goOn = () => {
+    const here = document.querySelector<HTMLElement>(`[data-cell="${cell}"]`);
+    if (here) onEnter(here);
+  };
+  return (
+    <li
+      data-cell={cell}
+      className="entry-row"
+      data-kind={isAnswer ? "answer" : kind === "text" ? "text" : "number"}
+    >
+      <div className="entry-name">
+        <h3 className="!font-sans text-[1.0625rem]">{name}</h3>
+        <p className="text-sm text-ink-3">
+          <LastValue entry={entry} now={now} />
+        </p>
+      </div>
+      {isNumber && <Strip entry={entry} />}
+      <div className="entry-place">
+        {isAnswer ? (
+          <AnswerButtons entry={entry} label={label} describedBy={notes} onDone={goOn} />
+        ) : isOpen ? (
+          <EntryBox
+            entry={entry}
+            label={label}
+            describedBy={notes}
+            onEnter={(input) => {
+              if (entry.commit() || input.value.trim() === "") onEnter(input);
+            }}
+          />
+        ) : (
+          <SentBox entry={entry} />
+        )}
+      </div>
+      <div className="entry-notes">
+        <EntryNotes
+          entry={entry}
+          id={notes}
+          zone={zone}
+          onDone={goOn}
+          renderIncidentLink={renderIncidentLink}
+        />
+      </div>
+    </li>
+  );
+}
+
+/** A value that has been handed over: it stands, and is no longer typed in. */
+function SentBox({ entry: { item, row } }: { entry: EntryCell }) {
+  if (!item) return null;
+  const isText = row.parameter.kind === "text";
+  const { typedText, typedUnit } = item.reading;
+  return (
+    <output
+      className={`entry-box items-center !border-dashed ${isText ? "" : "justify-end"}`}
+      data-size="large"
+      data-status={statusOf(item) ?? undefined}
+    >
+      <span className={`px-2.5 ${isText ? "py-2" : "num text-[1.6875rem] leading-none"}`}>{typedText}</span>
+      <span className="entry-unit">{unitLabel(typedUnit)}</span>
+    </output>
+  );
+}
+
+function Strip({ entry: { row, verdict, item, isOpen } }: { entry: EntryCell }) {
+  const bounds = row.limits.state === "in-force" ? row.limits.bounds : {};
+  const { decimals, name, unit, plausible } = row.parameter;
+  const judged = isOpen && verdict.state === "judged" ? verdict : null;
+  const value = isOpen ? judged?.value.value : item?.canonical;
+  const status = isOpen ? judged?.verdict.status : ((item && statusOf(item)) ?? undefined);
+  const previous = row.recent.find((each) => each.value !== null && each.qualifier === "")?.value ?? null;
+  return (
+    <div className="entry-strip">
+      <WellStrip
+        fluid
+        name={name}
+        unit={unitLabel(unit)}
+        decimals={decimals}
+        value={value ?? null}
+        previous={previous}
+        {...(status ? { status } : {})}
+        target={bounds.target}
+        watchLow={bounds.watchLow}
+        watchHigh={bounds.watchHigh}
+        toleranceLow={bounds.toleranceLow}
+        toleranceHigh={bounds.toleranceHigh}
+        possibleLow={plausible.low}
+        possibleHigh={plausible.high}
+      />
+    </div>
+  );
+}
+
+function LastValue({ entry, now }: { entry: EntryCell; now: number }) {
+  const last = entry.row.recent[0];
+  if (!last) return <>not read yet</>;
+  return (
+    <>
+      last <LastFigure entry={entry} last={last} /> <span aria-hidden="true">·</span>{" "}
+      <span className="whitespace-nowrap">{agoText(last.takenAt, now)}</span>
+    </>
+  );
+}
+
+/** The last value in the unit in which the next one is typed, where a factor is enough; else in the canonical one. */
+function LastFigure({ entry, last }: { entry: EntryCell; last: RecentReading }) {
+  const { parameter } = entry.row;
+  if (last.answer !== null) {
+    const choice = answersOf(entry).find((each) => each.code === last.answer);
+    return <b className="font-semibold text-ink-2">{choice?.label ?? last.answer}</b>;
+  }
+  if (last.value === null)
+    return <b className="num font-semibold text-ink-2">{last.qualifier || last.typedText}</b>;
+  const wanted = inUnit(last.value, parameter.unit, entry.draft.unit);
+  const unit = wanted === null ? parameter.unit : entry.draft.unit;
+  return (
+    <Quantity
+      className="font-semibold text-ink-2"
+      value={wanted ?? last.value}
+      decimals={parameter.decimals}
+      unit={unitLabel(unit)}
+      qualifier={last.qualifier}
+    />
+  );
+}
