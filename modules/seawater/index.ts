@@ -38,6 +38,7 @@ export {
   type PHScale,
 } from "./chemistry/ph-scale";
 export { type BoronRatio } from "./chemistry/total-ions";
+export { PUBLISHED_LIMITS, type PublishedLimit } from "./limits/published-limits.data";
 export {
   ADDITIVES,
   type Additive,
