@@ -7,5 +7,7 @@ export const auditMay = definePermissions("audit", {
   },
   readRecord: { says: "read the history of one record", roles: "everyone" },
   readHealth: { says: "see the health of the installation", roles: { admin: "everywhere", auditor: "everywhere" } },
+  backUp: { says: "make a backup", roles: "system" },
+  askForBackup: { says: "ask for a backup", roles: { admin: "everywhere" } },
   makeCheckpoint: { says: "send checkpoints of the history", roles: "system" },
 });

@@ -3,5 +3,6 @@ import { defineEvents } from "./model";
 export const auditEvents = defineEvents({
   migrated: ["database.migrated", 1, "brought the database to a new schema"],
   restored: ["database.restored", 1, "restored the database from a backup"],
+  backedUp: ["database.backed-up", 1, "made a backup of the database"],
   checkpointMade: ["history.checkpoint-made", 1, "sent a checkpoint of the history out of the machine"],
 });

@@ -81,8 +81,17 @@ function checkRows(sqlite: Sqlite, table: string, findings: Finding[]): void {
   }
 }
 
+function readFields(json: string): Record<string, unknown> | null {
+  try {
+    return JSON.parse(json) as Record<string, unknown>;
+  } catch {
+    return null;
+  }
+}
+
 function differingFields(before: string, after: string): string {
-  const [was, is] = [JSON.parse(before), JSON.parse(after)] as [Record<string, unknown>, Record<string, unknown>];
+  const [was, is] = [readFields(before), readFields(after)];
+  if (!was || !is) return "a form that cannot be read any more";
   const names = [...new Set([...Object.keys(was), ...Object.keys(is)])].filter((name) => was[name] !== is[name]);
   return names.length > 0 ? names.join(", ") : "its form";
 }
@@ -91,7 +100,8 @@ function checkSchema(sqlite: Sqlite, findings: Finding[]): void {
   const row = sqlite
     .prepare(
       "select id, json_extract(payload, '$.schemaAfter') as hash from audit_entry " +
-        "where json_extract(payload, '$.schemaAfter') is not null order by id desc limit 1",
+        "where verb = 'database.migrated' and json_valid(payload) and json_extract(payload, '$.schemaAfter') is not null " +
+        "order by id desc limit 1",
     )
     .get() as { id: number; hash: string } | undefined;
   if (row?.hash === schemaHash(sqlite)) return;
