@@ -9,8 +9,7 @@ import {
   VOLUME_UNITS,
   WATER_TYPES,
 } from "./model";
-import { ComponentRangeError, componentVolume } from "./rules/component-volume";
-import { readComponent, readDecimal, typedPath } from "./rules/typed-component";
+import { componentProblems, readDecimal } from "./rules/typed-component";
 import { SHAPE_TABLE } from "./shapes.data";
 
 /** A whole number, as such or as a form or an address carries it; an empty text is not 0. */
@@ -134,11 +133,8 @@ export const typedComponentInput = z
       const message = `A ${SHAPE_TABLE[typed.shape].label.toLowerCase()} has no such dimension.`;
       context.addIssue({ code: "custom", path: ["dimensions", key], message });
     }
-    try {
-      componentVolume(readComponent(typed));
-    } catch (error) {
-      if (!(error instanceof ComponentRangeError)) throw error;
-      context.addIssue({ code: "custom", path: typedPath(error.field), message: error.message });
+    for (const { path, message } of componentProblems(typed)) {
+      context.addIssue({ code: "custom", path, message });
     }
   });
 
@@ -162,7 +158,7 @@ const decimal = (mayBeNegative: boolean, what: string) =>
 const proposal = {
   systemId: id,
   note: z.string().trim().max(1000, "Keep the note under 1,000 characters.").default(""),
-  /** From when it counts, once approved; null for the moment of approval. */
+  /** From when it counts, once approved; null for the moment of the proposal. */
   effectiveFromAt: moment,
 };
 export const proposeVolumeInput = z.discriminatedUnion("method", [

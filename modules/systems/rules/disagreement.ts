@@ -52,6 +52,7 @@ function sentenceOf(differenceL: number, togetherL: number, ratio: number): stri
 
 /** A positive number with so many significant figures, as the screen writes it. */
 function significant(value: number, figures: number): string {
-  const magnitude = Math.floor(Math.log10(value));
-  return numberText(value, Math.min(12, Math.max(0, figures - 1 - magnitude)));
+  const rounded = Number(value.toPrecision(figures));
+  const decimals = figures - 1 - Math.floor(Math.log10(rounded));
+  return numberText(rounded, Math.min(12, Math.max(0, decimals)));
 }

@@ -8,7 +8,7 @@ import type {
   VolumeUnit,
 } from "../model";
 import { SHAPE_TABLE } from "../shapes.data";
-import { ComponentRangeError } from "./component-volume";
+import { ComponentRangeError, componentVolume } from "./component-volume";
 
 const NUMBER = /^[+-]?(\d+([.,]\d*)?|[.,]\d+)$/;
 
@@ -80,8 +80,41 @@ export function readComponent(typed: TypedComponent): VolumeComponent {
   } as VolumeComponent;
 }
 
+/** One thing that stands in the way of a component's volume: the path of its field within the component, a sentence. */
+export type ComponentProblem = { path: string[]; message: string };
+
+/**
+ * Everything that stands in the way of a component's volume: first every figure that is missing or cannot be read, all at
+ * once; where each can be read, what keeps them from making a tank. Empty when the volume can be computed.
+ */
+export function componentProblems(typed: TypedComponent): ComponentProblem[] {
+  const { inputs } = SHAPE_TABLE[typed.shape];
+  const checks: (() => unknown)[] = inputs.map(({ name, label, kind }) => () => {
+    const quantity = typed.dimensions[name];
+    if (!quantity || quantity.text.trim() === "") throw new ComponentRangeError(name, `${label} is missing.`);
+    return kind === "length"
+      ? readQuantity(quantity, typed.lengthUnit, "m", name)
+      : readQuantity(quantity, typed.volumeUnit, "L", name);
+  });
+  const { fillDepth, displacement } = typed;
+  if (fillDepth) checks.push(() => readQuantity(fillDepth, typed.lengthUnit, "m", "fillDepthM"));
+  if (displacement) checks.push(() => readQuantity(displacement, typed.volumeUnit, "L", "displacementL"));
+  const unread = checks.flatMap(problemOf);
+  return unread.length > 0 ? unread : problemOf(() => componentVolume(readComponent(typed)));
+}
+
+function problemOf(check: () => unknown): ComponentProblem[] {
+  try {
+    check();
+    return [];
+  } catch (error) {
+    if (!(error instanceof ComponentRangeError)) throw error;
+    return [{ path: typedPath(error.field), message: error.message }];
+  }
+}
+
 /** Where in a typed component the field of a ComponentRangeError stands, as a path. */
-export function typedPath(field: string): string[] {
+function typedPath(field: string): string[] {
   if (field === "fillDepthM") return ["fillDepth"];
   if (field === "displacementL") return ["displacement"];
   return ["dimensions", field];

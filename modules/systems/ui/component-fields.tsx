@@ -38,9 +38,9 @@ export function ComponentFields({
 }: ComponentFieldsProps) {
   const base = `components.${index}`;
   const { says, inputs, pointing, hasLevel } = SHAPE_TABLE[component.shape];
-  const { volume, problem } = readingOf(component);
+  const { volume, problems } = readingOf(component);
   const errorAt = (path: string) =>
-    problem?.path === path && (showAll || !problem.isUntouched) ? problem.message : undefined;
+    problems.find((each) => each.path === path && (showAll || !each.isUntouched))?.message;
   const change = (part: Partial<TypedComponent>) => onChange({ ...component, ...part });
   const title = component.name.trim() || `Component ${index + 1}`;
   return (

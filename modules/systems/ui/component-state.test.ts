@@ -20,15 +20,19 @@ describe("the component editor", () => {
     expect(litres).toMatchObject({ dimensions: {}, fillDepth: null, isAtSurface: false });
   });
 
-  it("calls an empty field untouched and a wrong one a mistake, at the field's own path", () => {
-    expect(readingOf(newComponent(units, false)).problem).toMatchObject({
-      path: "dimensions.lengthM",
-      isUntouched: true,
-    });
+  it("names every empty field at once as untouched, and a wrong one as a mistake at its own path", () => {
+    const begun = readingOf(newComponent(units, true)).problems;
+    expect(begun.map((each) => each.path)).toEqual([
+      "dimensions.lengthM",
+      "dimensions.widthM",
+      "dimensions.heightM",
+      "fillDepth",
+    ]);
+    expect(begun.every((each) => each.isUntouched)).toBe(true);
     const wrong = box({ dimensions: { ...box().dimensions, widthM: exact("wide") } });
-    expect(readingOf(wrong).problem).toMatchObject({ path: "dimensions.widthM", isUntouched: false });
+    expect(readingOf(wrong).problems).toMatchObject([{ path: "dimensions.widthM", isUntouched: false }]);
     const deep = box({ fillDepth: exact("1.5") });
-    expect(readingOf(deep).problem).toMatchObject({ path: "fillDepth", isUntouched: false });
+    expect(readingOf(deep).problems).toMatchObject([{ path: "fillDepth", isUntouched: false }]);
   });
 
   // By hand: 2 × 1 × 1 m = 2,000 L, half of it 1,000 L.

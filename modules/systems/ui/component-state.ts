@@ -1,7 +1,7 @@
 import type { ComponentVolume, Measured, Shape, TypedComponent, TypedQuantity, VolumeUnit } from "../model";
-import { ComponentRangeError, componentVolume } from "../rules/component-volume";
+import { componentVolume } from "../rules/component-volume";
 import { totalVolume } from "../rules/total-volume";
-import { readComponent, typedPath } from "../rules/typed-component";
+import { componentProblems, readComponent } from "../rules/typed-component";
 import { SHAPE_TABLE } from "../shapes.data";
 import type { ReadingUnits } from "./volume-units";
 
@@ -38,29 +38,27 @@ export function withShape(component: TypedComponent, shape: Shape): TypedCompone
   };
 }
 
-export type ComponentReading =
-  | { volume: ComponentVolume; problem: null }
-  | { volume: null; problem: { path: string; message: string; isUntouched: boolean } };
+export type ComponentReading = {
+  /** What it holds; null while something stands in the way. */
+  volume: ComponentVolume | null;
+  /** Sentences by path within the component; those of fields that are still empty are no mistakes yet. */
+  problems: { path: string; message: string; isUntouched: boolean }[];
+};
 
-/** What a component holds, or which of its fields stands in the way. A field that is still empty is no mistake yet. */
+/** What a component holds, or every field that stands in the way. */
 export function readingOf(component: TypedComponent): ComponentReading {
-  try {
-    return { volume: componentVolume(readComponent(component)), problem: null };
-  } catch (error) {
-    if (!(error instanceof ComponentRangeError)) throw error;
-    const typed = typedAt(component, error.field);
-    const isUntouched = typed === undefined || typed.text.trim() === "";
-    return {
-      volume: null,
-      problem: { path: typedPath(error.field).join("."), message: error.message, isUntouched },
-    };
-  }
+  const problems = componentProblems(component).map(({ path, message }) => {
+    const typed = typedAt(component, path);
+    return { path: path.join("."), message, isUntouched: typed === undefined || typed.text.trim() === "" };
+  });
+  return { volume: problems.length > 0 ? null : componentVolume(readComponent(component)), problems };
 }
 
-function typedAt(component: TypedComponent, field: string): TypedQuantity | undefined {
-  if (field === "fillDepthM") return component.fillDepth ?? undefined;
-  if (field === "displacementL") return component.displacement ?? undefined;
-  return component.dimensions[field];
+function typedAt(component: TypedComponent, path: readonly string[]): TypedQuantity | undefined {
+  const [head = "", input = ""] = path;
+  if (head === "fillDepth") return component.fillDepth ?? undefined;
+  if (head === "displacement") return component.displacement ?? undefined;
+  return component.dimensions[input];
 }
 
 /** The sum of what can be read so far, and how many components still cannot. */

@@ -37,7 +37,7 @@ export function GeometryEditor({ systemId, begin, units, zone, onClose, onDone }
   const { total, surfaceAreaM2, unread } = runningTotal(components, correlation);
   const isReady =
     effectiveFromAt !== undefined &&
-    components.every((component) => readingOf(component).problem === null && component.name.trim() !== "");
+    components.every((component) => readingOf(component).volume !== null && component.name.trim() !== "");
 
   const replace = (key: number, component: TypedComponent) =>
     setPieces(pieces.map((piece) => (piece.key === key ? { key, component } : piece)));
@@ -81,7 +81,8 @@ export function GeometryEditor({ systemId, begin, units, zone, onClose, onDone }
             {unread > 0 && `${unread === 1 ? "1 component" : `${unread} components`} not yet complete. `}
             {surfaceAreaM2 > 0
               ? `Open surface ${numberText(surfaceAreaM2, 2)} m²: a centimetre of level is ${numberText(surfaceAreaM2 * 10, 0)} L.`
-              : "No component holds the water level: changes of level cannot be counted."}
+              : !components.some((component) => component.isAtSurface) &&
+                "No component holds the water level: changes of level cannot be counted."}
           </span>
         </output>
         <Checkbox

@@ -14,7 +14,7 @@ import {
 } from "../model";
 import { SystemForm } from "./system-form";
 import { useDone } from "./use-done";
-import { volumeDecimals } from "./volume-text";
+import { plainVolume } from "./volume-text";
 
 type SystemsSetupProps = {
   systems: SystemRow[];
@@ -45,10 +45,8 @@ const columns = (volumeUnit: VolumeUnit): DataColumn<SystemRow>[] => [
     head: "Volume of record",
     numeric: true,
     cell: ({ volumeL }) => {
-      const value = volumeL === null ? null : convertByFactor(volumeL, "L", volumeUnit);
-      return (
-        <Quantity value={value} decimals={value === null ? 0 : volumeDecimals(value)} unit={volumeUnit} />
-      );
+      if (volumeL === null) return <Quantity value={null} decimals={0} />;
+      return <Quantity {...plainVolume(convertByFactor(volumeL, "L", volumeUnit))} unit={volumeUnit} />;
     },
   },
 ];

@@ -1,21 +1,22 @@
 import { describe, expect, it } from "vitest";
-import { shownVolume, volumeDecimals } from "./volume-text";
+import { plainVolume, shownVolume } from "./volume-text";
 
-// Source: JCGM 100:2008, 7.2.6: an uncertainty is given with at most two significant digits, the estimate to agree with it.
+// Source: JCGM 100:2008, 7.2.6: an uncertainty is given with at most two significant digits, and the estimate is rounded to
+// agree with it; figures by hand, the expanded uncertainty being twice the standard one.
 describe("a volume on screen", () => {
-  it("shows its expanded uncertainty to two figures and itself to the same decimal", () => {
-    const shown = (value: number, standardUncertainty: number, unit: "L" | "m³" = "L") =>
-      shownVolume({ value, standardUncertainty }, unit).decimals;
-    expect(shown(1000, 5)).toBe(0);
-    expect(shown(1000, 0.55)).toBe(1);
-    expect(shown(310_400, 3050, "m³")).toBe(1);
-    expect(shownVolume({ value: 310_400, standardUncertainty: 3050 }, "m³")).toMatchObject({
-      value: 310.4,
-      expanded: 6.1,
-    });
+  it.each([
+    [1000, 5, "L", { value: 1000, expanded: 10, decimals: 0 }],
+    [1000.44, 0.55, "L", { value: 1000.4, expanded: 1.1, decimals: 1 }],
+    [303_185, 1937.5, "L", { value: 303_200, expanded: 3900, decimals: 0 }],
+    [310_432, 3050, "m³", { value: 310.4, expanded: 6.1, decimals: 1 }],
+  ] as const)("%d L with a standard uncertainty of %d L in %s", (value, standardUncertainty, unit, shown) => {
+    expect(shownVolume({ value, standardUncertainty }, unit)).toEqual(shown);
   });
 
   it("without an uncertainty shows four figures", () => {
-    expect([0, 310.4, 27_810, 1.5, 0.002].map(volumeDecimals)).toEqual([0, 1, 0, 3, 3]);
+    expect([310.44, 27_812, 1.5, 0.0024].map((value) => plainVolume(value).value)).toEqual([
+      310.4, 27_810, 1.5, 0.002,
+    ]);
+    expect(plainVolume(310.44).decimals).toBe(1);
   });
 });

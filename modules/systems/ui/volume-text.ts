@@ -1,31 +1,42 @@
 import { convertByFactor } from "@/lib/units/factors";
 import type { Measured, VolumeUnit } from "../model";
 
+/** A number rounded for showing, and the decimals that it is shown with. */
+export type ShownNumber = { value: number; decimals: number };
+
+const MOST_DECIMALS = 3;
+
+/** The place (power of ten) of the last of so many significant figures; no finer than three decimals. */
+function lastPlace(value: number, figures: number): number {
+  const first = value === 0 ? 0 : Math.floor(Math.log10(Math.abs(value)));
+  return Math.max(-MOST_DECIMALS, first - figures + 1);
+}
+
+/** Rounds to a power of ten by way of its decimal text, so that no binary tail is left. */
+function roundedAt(value: number, place: number): ShownNumber {
+  return {
+    value: Number(`${Math.round(Number(`${value}e${-place}`))}e${place}`),
+    decimals: Math.max(0, -place),
+  };
+}
+
 /**
- * With how many decimals is a volume shown that has no uncertainty beside it? Four significant figures, at most three decimals.
+ * How is a volume shown that has no uncertainty beside it? To four significant figures, at most three decimals.
  *
- * @example volumeDecimals(310.4) // 1
- * @example volumeDecimals(27810) // 0
+ * @example plainVolume(303185) // { value: 303200, decimals: 0 }
  */
-export function volumeDecimals(value: number): number {
-  return decimalsFor(value, 4);
+export function plainVolume(value: number): ShownNumber {
+  return roundedAt(value, lastPlace(value, 4));
 }
-
-/** So many decimals that a number keeps its significant figures; 0 to 3. */
-function decimalsFor(value: number, figures: number): number {
-  if (value === 0) return 0;
-  const magnitude = Math.floor(Math.log10(Math.abs(value)));
-  return Math.min(3, Math.max(0, figures - 1 - magnitude));
-}
-
-export type ShownVolume = { value: number; expanded: number; decimals: number };
 
 /**
- * A volume in the unit that a person reads, with its expanded uncertainty (k = 2) to two significant figures and the volume
- * to the same decimal (GUM 7.2.6).
+ * A volume in the unit that a person reads, with its expanded uncertainty (k = 2) to two significant figures and the
+ * volume to the same place (JCGM 100:2008, 7.2.6). `expanded` is 0 where no uncertainty is given.
  */
-export function shownVolume(volumeL: Measured, unit: VolumeUnit): ShownVolume {
+export function shownVolume(volumeL: Measured, unit: VolumeUnit): ShownNumber & { expanded: number } {
   const value = convertByFactor(volumeL.value, "L", unit);
   const expanded = convertByFactor(2 * volumeL.standardUncertainty, "L", unit);
-  return { value, expanded, decimals: expanded === 0 ? volumeDecimals(value) : decimalsFor(expanded, 2) };
+  if (expanded === 0) return { ...plainVolume(value), expanded };
+  const place = lastPlace(expanded, 2);
+  return { ...roundedAt(value, place), expanded: roundedAt(expanded, place).value };
 }
