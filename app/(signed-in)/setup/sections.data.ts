@@ -1,5 +1,6 @@
 import type { Permission } from "@/modules/access";
 import { identityMay } from "@/modules/identity";
+import { methodsMay } from "@/modules/methods";
 import { notificationsMay } from "@/modules/notifications";
 import { systemsMay } from "@/modules/systems";
 
@@ -53,6 +54,29 @@ export const SETUP: readonly SetupGroup[] = [
         label: "Systems",
         says: "Bodies of water with their points, their equipment and how much they hold.",
         for: [systemsMay.read],
+      },
+    ],
+  },
+  {
+    title: "What is measured",
+    sections: [
+      {
+        href: "/setup/parameters",
+        label: "Parameters",
+        says: "What is measured or checked: units, decimals, plausible bounds, answers and what they mean.",
+        for: [methodsMay.read],
+      },
+      {
+        href: "/setup/methods",
+        label: "Methods",
+        says: "The written procedures by which parameters are measured.",
+        for: [methodsMay.read],
+      },
+      {
+        href: "/setup/instruments",
+        label: "Instruments",
+        says: "Devices by their serial number, their checks as found and as left, and when the next is due.",
+        for: [methodsMay.read],
       },
     ],
   },
