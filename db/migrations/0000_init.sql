@@ -145,6 +145,90 @@ CREATE TABLE `identity_throttle` (
 	`failures` integer NOT NULL
 );
 --> statement-breakpoint
+CREATE TABLE `imports_file` (
+	`id` integer PRIMARY KEY NOT NULL,
+	`sha256` text NOT NULL,
+	`original_name` text NOT NULL,
+	`bytes` integer NOT NULL,
+	`kind` text NOT NULL,
+	`stored_path` text NOT NULL,
+	`uploaded_by` integer NOT NULL,
+	`uploaded_at` integer NOT NULL
+);
+--> statement-breakpoint
+CREATE UNIQUE INDEX `imports_file_sha256` ON `imports_file` (`sha256`);--> statement-breakpoint
+CREATE TABLE `imports_progress` (
+	`import_id` integer PRIMARY KEY NOT NULL,
+	`check_run` integer NOT NULL,
+	`last_line` integer NOT NULL,
+	`share` real NOT NULL,
+	`rows_read` integer NOT NULL,
+	`accepted` integer NOT NULL,
+	`duplicate` integer NOT NULL,
+	`refused` integer NOT NULL,
+	`status_counts` text NOT NULL,
+	`committed_id` integer NOT NULL,
+	`committed` integer NOT NULL,
+	`updated_at` integer NOT NULL
+);
+--> statement-breakpoint
+CREATE TABLE `imports_import` (
+	`id` integer PRIMARY KEY NOT NULL,
+	`code` text NOT NULL,
+	`file_id` integer NOT NULL,
+	`file_name` text NOT NULL,
+	`state` text NOT NULL,
+	`form` text NOT NULL,
+	`header` text NOT NULL,
+	`survey` text,
+	`answers` text NOT NULL,
+	`defaults` text NOT NULL,
+	`sheet` text,
+	`check_run` integer DEFAULT 0 NOT NULL,
+	`accepted_count` integer,
+	`duplicate_count` integer,
+	`refused_count` integer,
+	`status_counts` text,
+	`delivery_id` integer,
+	`problem` text,
+	`uploaded_by` integer NOT NULL,
+	`uploaded_at` integer NOT NULL,
+	`checked_at` integer,
+	`committed_by` integer,
+	`commit_started_at` integer,
+	`committed_at` integer,
+	`withdrawn_by` integer,
+	`withdrawn_at` integer,
+	`withdrawn_reason` text,
+	FOREIGN KEY (`file_id`) REFERENCES `imports_file`(`id`) ON UPDATE no action ON DELETE no action
+);
+--> statement-breakpoint
+CREATE UNIQUE INDEX `imports_import_code` ON `imports_import` (`code`);--> statement-breakpoint
+CREATE INDEX `imports_import_file` ON `imports_import` (`file_id`);--> statement-breakpoint
+CREATE INDEX `imports_import_state` ON `imports_import` (`state`);--> statement-breakpoint
+CREATE TABLE `imports_staged_row` (
+	`id` integer PRIMARY KEY NOT NULL,
+	`import_id` integer NOT NULL,
+	`line` integer NOT NULL,
+	`column_index` integer NOT NULL,
+	`outcome` text NOT NULL,
+	`candidate` text NOT NULL,
+	`problems` text NOT NULL,
+	`reading_uuid` text,
+	`point_id` integer,
+	`parameter_id` integer,
+	`taken_at` integer,
+	`value` real,
+	`qualifier` text,
+	`identity` text,
+	`expected_status` text,
+	`expected_sentence` text
+);
+--> statement-breakpoint
+CREATE UNIQUE INDEX `imports_staged_row_place` ON `imports_staged_row` (`import_id`,`line`,`column_index`);--> statement-breakpoint
+CREATE INDEX `imports_staged_row_outcome` ON `imports_staged_row` (`import_id`,`outcome`,`id`);--> statement-breakpoint
+CREATE INDEX `imports_staged_row_identity` ON `imports_staged_row` (`import_id`,`identity`);--> statement-breakpoint
+CREATE INDEX `imports_staged_row_series` ON `imports_staged_row` (`import_id`,`point_id`,`parameter_id`,`taken_at`);--> statement-breakpoint
 CREATE TABLE `measurements_delivery` (
 	`id` integer PRIMARY KEY NOT NULL,
 	`source` text NOT NULL,
@@ -255,7 +339,7 @@ CREATE UNIQUE INDEX `measurements_reading_uuid` ON `measurements_reading` (`uuid
 CREATE UNIQUE INDEX `measurements_reading_supersedes` ON `measurements_reading` (`supersedes_id`);--> statement-breakpoint
 CREATE INDEX `measurements_reading_series` ON `measurements_reading` (`point_id`,`parameter_id`,`taken_at`);--> statement-breakpoint
 CREATE INDEX `measurements_reading_taken` ON `measurements_reading` (`taken_at`);--> statement-breakpoint
-CREATE INDEX `measurements_reading_delivery` ON `measurements_reading` (`delivery_id`);--> statement-breakpoint
+CREATE INDEX `measurements_reading_delivery` ON `measurements_reading` (`delivery_id`,`point_id`,`parameter_id`,`taken_at`);--> statement-breakpoint
 CREATE TABLE `measurements_watch_item` (
 	`id` integer PRIMARY KEY NOT NULL,
 	`point_id` integer NOT NULL,

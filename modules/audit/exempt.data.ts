@@ -10,5 +10,6 @@ export const EXEMPT_TABLES: Readonly<Record<string, string>> = {
   identity_throttle: "counts failed sign-ins for minutes",
   notifications_mail: "is mail in transit; queueing and what became of it are told by the mail's own columns",
   imports_staged_row: "holds rows of a file before they are accepted; the file itself is kept with its hash",
+  imports_progress: "counts how far a file has been worked through; what came of it is told by the import",
   __drizzle_migrations: "belongs to the migrator; each migration is an entry",
 };

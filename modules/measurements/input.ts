@@ -23,6 +23,13 @@ export const readingInput = z.strictObject({
 });
 export type ReadingInput = z.output<typeof readingInput>;
 
+/** A reading of a file: as typed, and in plain form where the file has conventions of its own. */
+export const deliveredReadingInput = readingInput.extend({
+  /** The value with a decimal point and without groups. */
+  plainText: z.string().min(1).max(2000).nullish(),
+});
+export type DeliveredReading = ReadingInput & { plainText?: string | null | undefined };
+
 export const recordReadingsInput = z.strictObject({
   source: z.enum(["entry", "grid"]).default("entry"),
   readings: z.array(readingInput).min(1, "Send at least one reading.").max(500, "Send at most 500 readings at once."),
@@ -83,10 +90,25 @@ export const proposeLimitsInput = z.strictObject({
   rows: z.array(limitRowInput).min(1, "Change at least one limit.").max(2000),
 });
 
+/** What the form asks about a workbook as a whole; its rows are read by the sheet below it. */
+export const limitWorkbookFormInput = z.strictObject({
+  title: proposeLimitsInput.shape.title,
+  reason: proposeLimitsInput.shape.reason,
+  /** Facility time, "YYYY-MM-DDTHH:MM". */
+  from: z.string().regex(/^\d{4}-\d{2}-\d{2}T\d{2}:\d{2}$/, "Say from when the limits hold."),
+  to: z.string().regex(/^(\d{4}-\d{2}-\d{2}T\d{2}:\d{2})?$/, "Give day and time, or leave it empty."),
+});
+
 export const decideLimitsInput = z.strictObject({
   workbookId: id,
   decision: z.enum(["approve", "decline"]),
   comment: z.string().trim().max(500).default(""),
+});
+
+/** What a person types to decide: the comment, and their password as a signature. */
+export const decideLimitsFormInput = z.strictObject({
+  comment: decideLimitsInput.shape.comment,
+  password: z.string().min(1, "Type your password to sign."),
 });
 
 export const saveLimitTemplateInput = z.strictObject({
@@ -95,6 +117,8 @@ export const saveLimitTemplateInput = z.strictObject({
   note: note.default(""),
   rows: z.array(z.strictObject({ parameterId: id, shape: limitShapeInput })).min(1, "Put at least one limit into it.").max(200),
 });
+
+export const limitTemplateFormInput = saveLimitTemplateInput.pick({ name: true, note: true });
 
 export const planWatchInput = z.strictObject({
   pointId: id,

@@ -3,13 +3,12 @@ import type { Orm } from "@/db/database";
 import { MINUTE_MS } from "@/lib/clock";
 import { invalidField, Problem } from "@/lib/problem";
 import { UnitError } from "@/lib/units/factors";
-import { findActivePerson } from "@/modules/identity";
-import { getParameter, toCanonical } from "@/modules/methods";
+import { toCanonical } from "@/modules/methods";
 import type { FacilityParameter } from "@/modules/methods/model";
-import type { ReadingInput } from "./input";
+import type { DeliveredReading } from "./input";
+import { IntakeCache } from "./intake-cache";
 import { judgeAndStore, judgeDependents } from "./judge";
 import type { JudgementCause, ReadingSource, ReadingValue, StatusVerdict } from "./model";
-import { getPoint } from "./points";
 import { parseValue } from "./rules/parse-value";
 import { reading } from "./schema";
 
@@ -18,13 +17,20 @@ const CLOCK_SLACK_MS = 5 * MINUTE_MS;
 
 type ReadingRow = typeof reading.$inferSelect;
 
-/** What was typed, brought to the canonical unit. @throws Problem `invalid` at `pointer` */
+/**
+ * What was typed, brought to the canonical unit. `plainText` says the same with a decimal point, where what was typed
+ * follows the conventions of a file ("1,234" in a file with decimal commas).
+ * @throws Problem `invalid` at `pointer`
+ */
 export function readTypedValue(
   parameter: FacilityParameter,
-  typed: { typedText: string; typedUnit?: string | null | undefined },
+  typed: { typedText: string; typedUnit?: string | null | undefined; plainText?: string | null | undefined },
   pointer: string,
 ): { value: number | null; qualifier: ReadingValue["qualifier"]; answer: string | null } {
-  const parsed = parseValue(typed.typedText, { kind: parameter.kind, choices: parameter.choices });
+  const shape = { kind: parameter.kind, choices: parameter.choices };
+  const parsed = typed.plainText
+    ? parseValue(typed.plainText, shape, ".")
+    : parseValue(typed.typedText, shape);
   if (!parsed.ok) throw invalidField(`${pointer}/typedText`, parsed.code, parsed.sentence);
   const isAnswer = parameter.kind === "choice" || parameter.kind === "text" || parameter.kind === "yes-no";
   if (isAnswer) return { value: parsed.value, qualifier: parsed.qualifier, answer: parsed.text };
@@ -45,9 +51,14 @@ function mustNotLieAhead(takenAt: number, at: number, pointer: string): void {
   throw invalidField(`${pointer}/takenAt`, "future", "The time lies in the future. Say when the reading was taken.");
 }
 
-function whoTook(db: Orm, given: number | null | undefined, enteredBy: number, pointer: string): number {
+function whoTook(
+  cache: IntakeCache,
+  given: number | null | undefined,
+  enteredBy: number,
+  pointer: string,
+): number {
   if (given === null || given === undefined || given === enteredBy) return enteredBy;
-  if (!findActivePerson(db, given)) {
+  if (!cache.isActivePerson(given)) {
     throw invalidField(`${pointer}/takenBy`, "unknown-person", "There is no such person here any more.");
   }
   return given;
@@ -59,12 +70,15 @@ export type Intake = {
   enteredBy: number;
   source: ReadingSource;
   sourceRef?: string | null;
+  /** A bulk that is not visible yet: nothing that counts depends on its readings; publishing judges again what will. */
   deliveryId?: number | null;
+  /** Looked up once for all readings of one transaction. */
+  cache?: IntakeCache;
 };
 
 export type Taken = { row: ReadingRow; verdict: StatusVerdict | null; isRepeat: boolean };
 
-function repeated(intake: Intake, input: ReadingInput, pointer: string): Taken | null {
+function repeated(intake: Intake, input: DeliveredReading, pointer: string): Taken | null {
   const known = intake.db.select().from(reading).where(eq(reading.uuid, input.uuid)).get();
   if (!known) return null;
   const isSame =
@@ -82,13 +96,13 @@ function repeated(intake: Intake, input: ReadingInput, pointer: string): Taken |
  * answered with the first; late readings judge again what they change.
  * @throws Problem `invalid` with pointers below `pointer`, `not-found`
  */
-export function takeReading(intake: Intake, input: ReadingInput, pointer = ""): Taken {
-  const { db, at, enteredBy } = intake;
+export function takeReading(intake: Intake, input: DeliveredReading, pointer = ""): Taken {
+  const { db, at, enteredBy, cache = new IntakeCache(db) } = intake;
   const repeat = repeated(intake, input, pointer);
   if (repeat) return repeat;
-  const place = getPoint(db, input.pointId);
+  const place = cache.place(input.pointId);
   if (place.systemState === "retired") throw new Problem("conflict", `${place.systemCode} is retired; nothing is read there.`);
-  const parameter = getParameter(db, input.parameterId);
+  const parameter = cache.parameter(input.parameterId);
   if (parameter.isRetired) throw invalidField(`${pointer}/parameterId`, "retired", `${parameter.name} is not measured any more.`);
   mustNotLieAhead(input.takenAt, at, pointer);
   const typed = readTypedValue(parameter, input, pointer);
@@ -103,7 +117,7 @@ export function takeReading(intake: Intake, input: ReadingInput, pointer = ""): 
       ...typed,
       takenAt: input.takenAt,
       enteredAt: at,
-      takenBy: whoTook(db, input.takenBy, enteredBy, pointer),
+      takenBy: whoTook(cache, input.takenBy, enteredBy, pointer),
       enteredBy,
       methodId: input.methodId ?? null,
       instrumentId: input.instrumentId ?? null,
@@ -116,7 +130,10 @@ export function takeReading(intake: Intake, input: ReadingInput, pointer = ""): 
     })
     .returning()
     .get();
-  return { row, verdict: judgeWithDependents(db, row, at, "entered", "late-reading"), isRepeat: false };
+  const versions = cache.versions(row.pointId, row.parameterId);
+  const verdict = judgeAndStore(db, row, at, "entered", { parameter, versions, isFirst: true });
+  if (row.deliveryId === null) judgeDependents(db, row, at, "late-reading");
+  return { row, verdict, isRepeat: false };
 }
 
 /** Judges a row that has just come to count, then what depends on it. */

@@ -44,14 +44,20 @@ export function precedingValues(db: Orm, of: Judged): TimedValue[] {
     order by r.taken_at`);
 }
 
-/** Judges one reading by the limits in force when it was taken. Pure decision over what is given; writes nothing. */
+/**
+ * Judges one reading by the limits in force when it was taken; writes nothing. What was read in the 24 h before is asked
+ * for only where a change is limited: without such a limit no verdict rests on it.
+ */
 export function verdictOn(
   of: Judged,
   parameter: FacilityParameter,
   versions: readonly LimitVersion[],
-  preceding: readonly TimedValue[],
+  findPreceding: () => readonly TimedValue[],
 ): { verdict: StatusVerdict; limitVersionId: number | null } {
   const limits = limitsAt(versions, of.takenAt, settings().STILLWELL_ZONE);
+  const isChangeLimited = limits.state === "in-force" && limits.bounds.greatestChange24h !== undefined;
+  const isPlain = of.value !== null && of.qualifier === "";
+  const preceding = isChangeLimited && isPlain ? findPreceding() : [];
   const change: Change24h | null = greatestChange24h(of, preceding);
   const means = parameter.choices.find((choice) => choice.code === of.answer)?.means;
   const verdict = judgeReading({
@@ -80,17 +86,28 @@ function latestJudgement(db: Orm, readingId: number): Stored | undefined {
     .get();
 }
 
+type Known = {
+  parameter?: FacilityParameter;
+  versions?: readonly LimitVersion[];
+  /** The reading has just been stored, so there is no earlier judgement. */
+  isFirst?: boolean;
+};
+
 /** Judges a reading and appends the judgement, where it is the first or says something new. Answers the verdict. */
 export function judgeAndStore(
   db: Orm,
   of: Judged,
   at: number,
   cause: JudgementCause,
-  parameter = getParameter(db, of.parameterId),
-  versions = approvedVersions(db, of.pointId, of.parameterId),
+  known: Known = {},
 ): StatusVerdict {
-  const { verdict, limitVersionId } = verdictOn(of, parameter, versions, precedingValues(db, of));
-  const before = latestJudgement(db, of.id);
+  const {
+    parameter = getParameter(db, of.parameterId),
+    versions = approvedVersions(db, of.pointId, of.parameterId),
+    isFirst = false,
+  } = known;
+  const { verdict, limitVersionId } = verdictOn(of, parameter, versions, () => precedingValues(db, of));
+  const before = isFirst ? undefined : latestJudgement(db, of.id);
   const isSame =
     before !== undefined &&
     before.status === verdict.status &&
@@ -135,6 +152,6 @@ export function judgeDependents(db: Orm, around: Judged, at: number, cause: Judg
   if (dependents.length === 0) return 0;
   const parameter = getParameter(db, around.parameterId);
   const versions = approvedVersions(db, around.pointId, around.parameterId);
-  for (const dependent of dependents) judgeAndStore(db, dependent, at, cause, parameter, versions);
+  for (const dependent of dependents) judgeAndStore(db, dependent, at, cause, { parameter, versions });
   return dependents.length;
 }

@@ -75,7 +75,12 @@ export const reading = sqliteTable(
     uniqueIndex("measurements_reading_supersedes").on(table.supersedesId),
     index("measurements_reading_series").on(table.pointId, table.parameterId, table.takenAt),
     index("measurements_reading_taken").on(table.takenAt),
-    index("measurements_reading_delivery").on(table.deliveryId),
+    index("measurements_reading_delivery").on(
+      table.deliveryId,
+      table.pointId,
+      table.parameterId,
+      table.takenAt,
+    ),
   ],
 );
 

@@ -7,10 +7,11 @@ import { notFound, Problem } from "@/lib/problem";
 import { type CommandContext, defineCommand } from "@/modules/audit";
 import { measurementsMay } from "../abilities";
 import { measurementsEvents } from "../events";
-import { readingInput } from "../input";
+import { deliveredReadingInput } from "../input";
 import { takeReading } from "../intake";
+import { IntakeCache } from "../intake-cache";
 import type { JudgementCause } from "../model";
-import { delivery, reading } from "../schema";
+import { delivery } from "../schema";
 import { judgeSeriesAgain } from "./judge-series-again";
 
 function getDelivery(db: Orm, deliveryId: number) {
@@ -41,7 +42,7 @@ export const openDelivery = defineCommand({
 export const growDelivery = defineCommand({
   verb: "growDelivery",
   permission: measurementsMay.deliver,
-  input: z.strictObject({ deliveryId: z.number().int(), readings: z.array(readingInput).min(1).max(500) }),
+  input: z.strictObject({ deliveryId: z.number().int(), readings: z.array(deliveredReadingInput).min(1).max(500) }),
   run(ctx, { deliveryId, readings }) {
     invariant(ctx.actor.personId !== null, "a person brings in readings");
     const row = getDelivery(ctx.db, deliveryId);
@@ -53,6 +54,7 @@ export const growDelivery = defineCommand({
       source: row.source,
       sourceRef: row.sourceRef,
       deliveryId,
+      cache: new IntakeCache(ctx.db),
     };
     const added = readings.filter((each, index) => !takeReading(intake, each, `/readings/${index}`).isRepeat);
     return {
@@ -66,20 +68,29 @@ export const growDelivery = defineCommand({
   },
 });
 
+type Series = { pointId: number; parameterId: number; fromAt: number; toAt: number };
+
+/** The series a delivery touches, found by steps through its index: as quick for a million readings as for ten. */
+function touchedSeries(db: Orm, deliveryId: number): Series[] {
+  const found: Series[] = [];
+  let last = { pointId: -1, parameterId: -1 };
+  for (;;) {
+    const next = db.get<Series | undefined>(sql`
+      select point_id as "pointId", parameter_id as "parameterId", taken_at as "fromAt",
+        (select max(taken_at) from measurements_reading s where s.delivery_id = r.delivery_id
+          and s.point_id = r.point_id and s.parameter_id = r.parameter_id) as "toAt"
+      from measurements_reading r
+      where delivery_id = ${deliveryId} and (point_id, parameter_id) > (${last.pointId}, ${last.parameterId})
+      order by point_id, parameter_id, taken_at limit 1`);
+    if (!next) return found;
+    found.push(next);
+    last = next;
+  }
+}
+
 /** Asks that every series a delivery touches be judged again, a day beyond its last reading included. */
 function judgeTouchedSeries(ctx: CommandContext, deliveryId: number, cause: JudgementCause): void {
-  const series = ctx.db
-    .select({
-      pointId: reading.pointId,
-      parameterId: reading.parameterId,
-      fromAt: sql<number>`min(${reading.takenAt})`,
-      toAt: sql<number>`max(${reading.takenAt})`,
-    })
-    .from(reading)
-    .where(eq(reading.deliveryId, deliveryId))
-    .groupBy(reading.pointId, reading.parameterId)
-    .all();
-  for (const each of series) {
+  for (const each of touchedSeries(ctx.db, deliveryId)) {
     ctx.enqueue(judgeSeriesAgain, { ...each, toAt: each.toAt + DAY_MS, cause, after: null });
   }
 }

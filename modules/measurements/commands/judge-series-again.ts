@@ -50,7 +50,7 @@ export const judgeSeriesAgain: Command<typeof inputSchema, { judged: number }> =
       .all();
     const parameter = getParameter(ctx.db, parameterId);
     const versions = approvedVersions(ctx.db, pointId, parameterId);
-    for (const row of rows) judgeAndStore(ctx.db, row, ctx.at, cause, parameter, versions);
+    for (const row of rows) judgeAndStore(ctx.db, row, ctx.at, cause, { parameter, versions });
     const last = rows.at(-1);
     if (last && rows.length === SLICE) {
       ctx.enqueue(judgeSeriesAgain, { ...input, after: { takenAt: last.takenAt, id: last.id } });
