@@ -35,6 +35,7 @@ export function proxy(request: NextRequest): NextResponse {
   const policy = contentPolicy(nonce, secureCookies, NODE_ENV === "development");
   const headers = new Headers(request.headers);
   headers.set("x-nonce", nonce);
+  headers.set("x-page", request.nextUrl.pathname);
   // Next reads the nonce for its own scripts from here.
   headers.set("content-security-policy", policy);
   const response = NextResponse.next({ request: { headers } });

@@ -17,8 +17,13 @@ export function mustComeFromHere(request: Request): void {
     throw new Problem("wrong-origin", "Writes are taken from this site's own pages alone.");
   }
   if (origin === null) return;
-  const isOwn = origin === new URL(settings().STILLWELL_URL).origin || new URL(origin).host === host;
+  const isOwn = origin === new URL(settings().STILLWELL_URL).origin || hostOf(origin) === host;
   if (!isOwn) throw new Problem("wrong-origin", "Writes are taken from this site's own pages alone.");
+}
+
+/** The host of an origin; null where it is none (`Origin: null` of a sandboxed page). */
+function hostOf(origin: string): string | null {
+  return URL.canParse(origin) ? new URL(origin).host : null;
 }
 
 /**

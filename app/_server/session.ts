@@ -1,5 +1,5 @@
 import "server-only";
-import { cookies } from "next/headers";
+import { cookies, headers } from "next/headers";
 import { forbidden, notFound, redirect } from "next/navigation";
 import { decode } from "next-auth/jwt";
 import { cache } from "react";
@@ -50,15 +50,22 @@ export async function requestActor(): Promise<Actor> {
   return actor;
 }
 
+/** The sign-in page, which leads back to where somebody wanted to go. */
+async function signInAddress(cause: Problem): Promise<string> {
+  const page = (await headers()).get("x-page") ?? "/";
+  const search = new URLSearchParams();
+  if (cause.code === "session-ended") search.set("ended", "1");
+  if (page !== "/") search.set("to", page);
+  return search.size > 0 ? `/sign-in?${search}` : "/sign-in";
+}
+
 /** The actor of a page, once a request; people who are not signed in are sent to the sign-in page. */
 export const pageActor = cache(async (): Promise<Actor> => {
   prepareRuntime();
   try {
     return await requestActor();
   } catch (cause) {
-    if (cause instanceof Problem && cause.status === 401) {
-      redirect(cause.code === "session-ended" ? "/sign-in?ended=1" : "/sign-in");
-    }
+    if (cause instanceof Problem && cause.status === 401) redirect(await signInAddress(cause));
     throw cause;
   }
 });

@@ -9,12 +9,20 @@ const PATH_WORDS: Readonly<Record<string, string>> = {
   roles: "Roles",
 };
 
+function decoded(part: string): string {
+  try {
+    return decodeURIComponent(part);
+  } catch {
+    return part;
+  }
+}
+
 const isNumber = (part: string): boolean => /^\d+$/.test(part);
 
 function wordsOf(part: string, href: string, entries: readonly { href: string; label: string }[]): string {
   const entry = entries.find((one) => one.href === href);
   if (entry) return entry.label;
-  const plain = decodeURIComponent(part);
+  const plain = decoded(part);
   const known = PATH_WORDS[plain];
   if (known) return known;
   // Codes such as KELP-01 stay as they are; words of an address begin with a capital.

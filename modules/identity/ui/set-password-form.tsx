@@ -1,4 +1,5 @@
 "use client";
+import { useRouter } from "next/navigation";
 import { z } from "zod";
 import { Button, Field, FormError, sendCommand, TextInput, useProblemForm } from "@/lib/ui";
 import { setPasswordInput } from "../input";
@@ -10,12 +11,13 @@ const schema = setPasswordInput
 
 /** Chooses a password by a one-time link. */
 export function SetPasswordForm({ token }: { token: string }) {
+  const router = useRouter();
   const { form, problem, submit, errorOf, sending } = useProblemForm({
     schema,
     defaultValues: { token, password: "", again: "" },
     send: async ({ password }, idempotencyKey) => {
       await sendCommand("/api/v1/password/set", { token, password }, { idempotencyKey });
-      window.location.assign("/sign-in?set=1");
+      router.push("/sign-in?set=1");
     },
   });
   return (
