@@ -17,7 +17,8 @@ export function mustComeFromHere(request: Request): void {
     throw new Problem("wrong-origin", "Writes are taken from this site's own pages alone.");
   }
   if (origin === null) return;
-  const isOwn = origin === new URL(settings().STILLWELL_URL).origin || hostOf(origin) === host;
+  const isOwn =
+    origin === new URL(settings().STILLWELL_URL).origin || (host !== null && hostOf(origin) === host);
   if (!isOwn) throw new Problem("wrong-origin", "Writes are taken from this site's own pages alone.");
 }
 
