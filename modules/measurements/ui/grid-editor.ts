@@ -1,0 +1,69 @@
+import type { ICellEditorComp, ICellEditorParams } from "ag-grid-community";
+import type { GridDesk } from "./grid-desk";
+
+/** What is being typed in the one open cell; kept here until Enter, Tab, an arrow or a click takes it over. */
+export interface PendingEdit {
+  key: string;
+  text: string;
+  /** Began by typing over the cell: arrows leave it. Else (F2, double click) they move in the text. */
+  typedOver: boolean;
+}
+
+export interface EditorContext {
+  readonly desk: GridDesk;
+  pending: PendingEdit | null;
+}
+
+export interface EditorParams {
+  readonly keyOf: (params: { data: unknown }) => string;
+}
+
+/** The box of the cell that is being typed in: paints the status at every key. Plain DOM, no key is lost while it opens. */
+export class GridEditor implements ICellEditorComp {
+  #input!: HTMLInputElement;
+  #context!: EditorContext;
+
+  init(params: ICellEditorParams & EditorParams): void {
+    this.#context = params.context as EditorContext;
+    const key = params.keyOf(params);
+    const { desk } = this.#context;
+    const begun = params.eventKey !== null && params.eventKey.length === 1 ? params.eventKey : null;
+    const text = begun ?? desk.view(key).text;
+    const watched = desk.sheet.watch.get(key);
+    const isNumber = watched?.parameter.kind === "number" || watched?.parameter.kind === "count";
+    const input = document.createElement("input");
+    input.type = "text";
+    input.className = "desk-input";
+    input.inputMode = isNumber ? "decimal" : "text";
+    input.autocomplete = "off";
+    input.spellcheck = false;
+    input.value = text;
+    input.ariaLabel = `${watched?.systemCode ?? ""}, ${watched?.parameter.name ?? ""}`;
+    input.addEventListener("input", () => this.#typed(key));
+    this.#input = input;
+    this.#context.pending = { key, text, typedOver: begun !== null };
+    this.#typed(key);
+  }
+
+  #typed(key: string): void {
+    const { desk, pending } = this.#context;
+    const text = this.#input.value;
+    if (pending?.key === key) pending.text = text;
+    const verdict = desk.judge(key, { text, unit: desk.unitAt(key) });
+    this.#input.dataset.status = verdict?.state === "judged" ? verdict.verdict.status : "";
+  }
+
+  getGui(): HTMLElement {
+    return this.#input;
+  }
+
+  afterGuiAttached(): void {
+    this.#input.focus();
+    const end = this.#input.value.length;
+    this.#input.setSelectionRange(end, end);
+  }
+
+  getValue(): string {
+    return this.#input.value;
+  }
+}
