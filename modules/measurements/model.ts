@@ -2,6 +2,7 @@ import type { FacilityParameter, ParameterKind, PlausibleBounds } from "@/module
 
 export type { ParameterKind, PlausibleBounds };
 export { formatNumber, formatValue } from "./rules/format-value";
+export { type ShownValue, shownValue } from "./rules/shown-value";
 
 /** The server's judgement of a reading; codes as stored, words in `STATUS_WORDS`. */
 export const STATUSES = ["within", "watch", "out", "implausible", "unjudged", "none"] as const;
@@ -207,4 +208,40 @@ export interface WatchRow {
   readonly instrumentId: number | null;
   readonly limits: LimitsInForce;
   readonly recent: readonly RecentReading[];
+}
+
+/** One version of the limits of a point and parameter, with who proposed and decided on it. */
+export interface LimitVersionRow extends LimitVersion {
+  readonly state: LimitState;
+  readonly workbookId: number;
+  readonly workbookTitle: string;
+  readonly reason: string;
+  readonly proposedBy: number;
+  readonly proposedAt: number;
+  readonly decidedBy: number | null;
+  readonly decidedAt: number | null;
+  readonly decisionComment: string | null;
+}
+
+/** The limits of a point and parameter: what is in force at the moment asked about, and every version behind it, newest first. */
+export interface LimitBoardRow {
+  readonly pointId: number;
+  readonly pointName: string;
+  readonly systemId: number;
+  readonly systemCode: string;
+  readonly parameterId: number;
+  readonly limits: LimitsInForce;
+  readonly versions: readonly LimitVersionRow[];
+  /** The newest reading, where it has a number. */
+  readonly latest: { readonly value: number; readonly status: Status } | null;
+}
+
+/** That a parameter is read at a point, as it is planned. */
+export interface WatchPlanRow {
+  readonly pointId: number;
+  readonly parameterId: number;
+  readonly everyDays: number | null;
+  readonly unit: string | null;
+  readonly methodId: number | null;
+  readonly instrumentId: number | null;
 }

@@ -1,6 +1,5 @@
-import { and, asc, desc, eq, gt, gte, inArray, isNull, lt, lte, or, sql } from "drizzle-orm";
+import { and, asc, eq, gt, gte, inArray, isNotNull, isNull, lt, lte, or, sql } from "drizzle-orm";
 import type { Orm } from "@/db/database";
-import { DAY_MS } from "@/lib/clock";
 import { settings } from "@/lib/env";
 import { dayBounds } from "@/lib/zone";
 import { explanation, readingInForce, watchItem } from "@/modules/measurements";
@@ -8,6 +7,7 @@ import { parameterDirectory } from "@/modules/methods";
 import { contentHash } from "@/modules/signoff";
 import { pointDirectory } from "@/modules/systems";
 import type { SheetGap, SheetLine } from "./model";
+import { type DueItem, gapsOfDay } from "./rules/gaps";
 import { dayReview } from "./schema";
 
 export type DaySheet = {
@@ -21,20 +21,56 @@ export type DaySheet = {
   contentHash: string;
 };
 
+type Span = { fromAt: number; toAt: number };
+type Placed = SheetLine & { areaId: number };
+
 /** The moments between which an operational day lies. */
-export function dayLimits(onDay: string): { fromAt: number; toAt: number } {
+export function dayLimits(onDay: string): Span {
   const { STILLWELL_ZONE, dayCutMinutes } = settings();
   return dayBounds(onDay, STILLWELL_ZONE, dayCutMinutes);
 }
 
-function linesOf(db: Orm, areaId: number, fromAt: number, toAt: number): SheetLine[] {
+/** The readings in force of some areas in a span, in walking order: one query, whatever the number of days. */
+function linesOf(db: Orm, areaIds: readonly number[], { fromAt, toAt }: Span): Placed[] {
   const rows = db
-    .select()
+    .select({
+      areaId: pointDirectory.areaId,
+      systemOrder: pointDirectory.systemOrder,
+      readingId: readingInForce.id,
+      pointId: readingInForce.pointId,
+      parameterId: readingInForce.parameterId,
+      systemCode: pointDirectory.systemCode,
+      pointCode: pointDirectory.pointCode,
+      parameterCode: parameterDirectory.parameterCode,
+      typedText: readingInForce.typedText,
+      typedUnit: readingInForce.typedUnit,
+      value: readingInForce.value,
+      qualifier: readingInForce.qualifier,
+      answer: readingInForce.answer,
+      takenAt: readingInForce.takenAt,
+      enteredAt: readingInForce.enteredAt,
+      takenBy: readingInForce.takenBy,
+      enteredBy: readingInForce.enteredBy,
+      methodId: readingInForce.methodId,
+      instrumentId: readingInForce.instrumentId,
+      note: readingInForce.note,
+      supersedesId: readingInForce.supersedesId,
+      correctionReason: readingInForce.correctionReason,
+      confirmedAt: readingInForce.confirmedAt,
+      status: readingInForce.status,
+      side: readingInForce.side,
+      sentence: readingInForce.sentence,
+    })
     .from(readingInForce)
     .innerJoin(pointDirectory, eq(pointDirectory.pointId, readingInForce.pointId))
     .innerJoin(parameterDirectory, eq(parameterDirectory.parameterId, readingInForce.parameterId))
     .where(
-      and(eq(pointDirectory.areaId, areaId), gte(readingInForce.takenAt, fromAt), lt(readingInForce.takenAt, toAt)),
+      and(
+        // the plus keeps SQLite from beginning with the areas: the span of days is what narrows
+        inArray(sql`+${pointDirectory.areaId}`, [...areaIds]),
+        gte(readingInForce.takenAt, fromAt),
+        lt(readingInForce.takenAt, toAt),
+      ),
     )
     .orderBy(
       asc(pointDirectory.systemOrder),
@@ -45,38 +81,15 @@ function linesOf(db: Orm, areaId: number, fromAt: number, toAt: number): SheetLi
       asc(readingInForce.id),
     )
     .all();
-  const ids = rows.map((row) => row.measurements_reading_in_force.id);
-  const said = explanationsOf(db, ids);
-  return rows.map((row) => {
-    const { measurements_reading_in_force: reading, systems_point_directory: place } = row;
-    return {
-      readingId: reading.id,
-      pointId: reading.pointId,
-      parameterId: reading.parameterId,
-      systemCode: place.systemCode,
-      pointCode: place.pointCode,
-      parameterCode: row.methods_parameter_directory.parameterCode,
-      typedText: reading.typedText,
-      typedUnit: reading.typedUnit,
-      value: reading.value,
-      qualifier: reading.qualifier,
-      answer: reading.answer,
-      takenAt: reading.takenAt,
-      enteredAt: reading.enteredAt,
-      takenBy: reading.takenBy,
-      enteredBy: reading.enteredBy,
-      methodId: reading.methodId,
-      instrumentId: reading.instrumentId,
-      note: reading.note,
-      supersedesId: reading.supersedesId,
-      correctionReason: reading.correctionReason,
-      isConfirmed: reading.confirmedAt !== null,
-      status: reading.status,
-      side: reading.side,
-      sentence: reading.sentence,
-      explanations: said.get(reading.id) ?? [],
-    };
-  });
+  const said = explanationsOf(
+    db,
+    rows.map((row) => row.readingId),
+  );
+  return rows.map(({ systemOrder: _order, confirmedAt, ...row }) => ({
+    ...row,
+    isConfirmed: confirmedAt !== null,
+    explanations: said.get(row.readingId) ?? [],
+  }));
 }
 
 function explanationsOf(db: Orm, readingIds: number[]): Map<number, SheetLine["explanations"][number][]> {
@@ -97,72 +110,122 @@ function explanationsOf(db: Orm, readingIds: number[]): Map<number, SheetLine["e
   return byReading;
 }
 
-/** What was due on the day by the plan of watch items and has no reading: the last one lies further back than allowed. */
-function gapsOf(db: Orm, areaId: number, fromAt: number, toAt: number): SheetGap[] {
-  const due = db
-    .select()
+/** What is due by the plan of watch items within a span, each with its last reading before the span: one query. */
+function dueItemsOf(
+  db: Orm,
+  areaIds: readonly number[],
+  { fromAt, toAt }: Span,
+): (DueItem & { areaId: number })[] {
+  return db
+    .select({
+      areaId: pointDirectory.areaId,
+      pointId: watchItem.pointId,
+      parameterId: watchItem.parameterId,
+      everyDays: sql<number>`${watchItem.everyDays}`,
+      since: watchItem.since,
+      endedAt: watchItem.endedAt,
+      systemCode: pointDirectory.systemCode,
+      pointCode: pointDirectory.pointCode,
+      parameterCode: parameterDirectory.parameterCode,
+      parameterName: parameterDirectory.parameterName,
+      lastBeforeAt: sql<number | null>`(select ${readingInForce.takenAt} from ${readingInForce}
+        where ${readingInForce.pointId} = ${watchItem.pointId}
+          and ${readingInForce.parameterId} = ${watchItem.parameterId} and ${readingInForce.takenAt} < ${fromAt}
+        order by ${readingInForce.takenAt} desc limit 1)`,
+    })
     .from(watchItem)
     .innerJoin(pointDirectory, eq(pointDirectory.pointId, watchItem.pointId))
     .innerJoin(parameterDirectory, eq(parameterDirectory.parameterId, watchItem.parameterId))
     .where(
       and(
-        eq(pointDirectory.areaId, areaId),
+        inArray(pointDirectory.areaId, [...areaIds]),
         eq(pointDirectory.systemState, "in-service"),
-        lte(watchItem.since, fromAt),
-        or(isNull(watchItem.endedAt), gt(watchItem.endedAt, toAt)),
+        isNotNull(watchItem.everyDays),
+        lte(watchItem.since, toAt),
+        or(isNull(watchItem.endedAt), gt(watchItem.endedAt, fromAt)),
       ),
     )
     .orderBy(asc(pointDirectory.systemOrder), asc(pointDirectory.systemCode), asc(watchItem.position))
     .all();
-  return due.flatMap(({ measurements_watch_item: item, systems_point_directory: place, methods_parameter_directory: parameter }) => {
-    if (item.everyDays === null) return [];
-    const last = db
-      .select({ at: sql<number | null>`max(${readingInForce.takenAt})` })
-      .from(readingInForce)
-      .where(
-        and(
-          eq(readingInForce.pointId, item.pointId),
-          eq(readingInForce.parameterId, item.parameterId),
-          lt(readingInForce.takenAt, toAt),
-        ),
-      )
-      .get();
-    const lastAt = last?.at ?? null;
-    if (lastAt !== null && lastAt >= fromAt - (item.everyDays - 1) * DAY_MS) return [];
-    return [
-      {
-        systemCode: place.systemCode,
-        pointCode: place.pointCode,
-        parameterCode: parameter.parameterCode,
-        parameterName: parameter.parameterName,
-        lastAt,
-      },
-    ];
-  });
 }
 
 /** A line as it is signed: by ids, so that a system's new code changes nothing that was signed. */
-function signedLine({ systemCode: _system, pointCode: _point, parameterCode: _parameter, ...line }: SheetLine) {
+function signedLine({
+  systemCode: _system,
+  pointCode: _point,
+  parameterCode: _parameter,
+  ...line
+}: SheetLine) {
   return line;
 }
 
-/** What an area read on an operational day, what is missing, and the hash of what was read. */
+const sheetKeyOf = (areaId: number, onDay: string): string => `${areaId}/${onDay}`;
+
+/**
+ * What some areas read on some operational days, what is missing, and the hash of what was read; day by day, areas in the
+ * order given. The span between the first and the last day is read as one: ask for days that lie near each other.
+ */
+export function daySheets(db: Orm, areaIds: readonly number[], days: readonly string[]): DaySheet[] {
+  if (areaIds.length === 0 || days.length === 0) return [];
+  const spans = days.map((onDay) => ({ onDay, ...dayLimits(onDay) }));
+  const whole = {
+    fromAt: Math.min(...spans.map((span) => span.fromAt)),
+    toAt: Math.max(...spans.map((span) => span.toAt)),
+  };
+  const placed = linesOf(db, areaIds, whole);
+  const due = dueItemsOf(db, areaIds, whole);
+  const takenAt = new Map<string, number[]>();
+  for (const line of placed) {
+    const key = sheetKeyOf(line.pointId, String(line.parameterId));
+    const moments = takenAt.get(key);
+    if (moments) moments.push(line.takenAt);
+    else takenAt.set(key, [line.takenAt]);
+  }
+  const momentsOf = (item: DueItem) => takenAt.get(sheetKeyOf(item.pointId, String(item.parameterId))) ?? [];
+  return spans.flatMap(({ onDay, fromAt, toAt }) =>
+    areaIds.map((areaId) => {
+      const lines = placed
+        .filter((line) => line.areaId === areaId && line.takenAt >= fromAt && line.takenAt < toAt)
+        .map(({ areaId: _area, ...line }): SheetLine => line);
+      const ofArea = due.filter((item) => item.areaId === areaId);
+      return {
+        areaId,
+        onDay,
+        fromAt,
+        toAt,
+        lines,
+        gaps: gapsOfDay(ofArea, momentsOf, { fromAt, toAt }),
+        contentHash: contentHash({ areaId, onDay, lines: lines.map(signedLine) }),
+      };
+    }),
+  );
+}
+
+/** What an area read on one operational day. */
 export function daySheet(db: Orm, areaId: number, onDay: string): DaySheet {
-  const { fromAt, toAt } = dayLimits(onDay);
-  const lines = linesOf(db, areaId, fromAt, toAt);
-  const gaps = gapsOf(db, areaId, fromAt, toAt);
-  return { areaId, onDay, fromAt, toAt, lines, gaps, contentHash: contentHash({ areaId, onDay, lines: lines.map(signedLine) }) };
+  const [sheet] = daySheets(db, [areaId], [onDay]);
+  if (!sheet) throw new RangeError("one area and one day make one sheet");
+  return sheet;
+}
+
+export type Review = typeof dayReview.$inferSelect;
+
+/** The newest review of each sheet of some days, by area and day. */
+export function newestReviews(
+  db: Orm,
+  days: readonly string[],
+): (areaId: number, onDay: string) => Review | null {
+  const rows = db
+    .select()
+    .from(dayReview)
+    .where(inArray(dayReview.onDay, [...days]))
+    .orderBy(asc(dayReview.id))
+    .all();
+  const newest = new Map(rows.map((row) => [sheetKeyOf(row.areaId, row.onDay), row]));
+  return (areaId, onDay) => newest.get(sheetKeyOf(areaId, onDay)) ?? null;
 }
 
 /** The newest review of a sheet. */
-export function newestReview(db: Orm, areaId: number, onDay: string) {
-  return (
-    db
-      .select()
-      .from(dayReview)
-      .where(and(eq(dayReview.areaId, areaId), eq(dayReview.onDay, onDay)))
-      .orderBy(desc(dayReview.id))
-      .limit(1)
-      .get() ?? null
-  );
+export function newestReview(db: Orm, areaId: number, onDay: string): Review | null {
+  return newestReviews(db, [onDay])(areaId, onDay);
 }

@@ -3,4 +3,4 @@ import "server-only";
 export { roundsMay } from "./abilities";
 export { reviewDays } from "./commands/review-days";
 export { dayLimits } from "./day-sheet";
-export { type DaySheetShown, getDaySheet, listDaySheets } from "./queries/get-day-sheet";
+export { type DaySheetRow, type DaySheetShown, getDaySheet, listDaySheets } from "./queries/get-day-sheet";

@@ -43,6 +43,30 @@ export interface SheetLine {
   readonly explanations: readonly { readonly text: string; readonly by: number; readonly at: number }[];
 }
 
+/** What a corrected line said before. */
+export interface OldValue {
+  readonly typedText: string;
+  readonly typedUnit: string | null;
+  readonly value: number | null;
+  readonly qualifier: Qualifier;
+  readonly answer: string | null;
+  readonly takenAt: number;
+  readonly enteredBy: number;
+  readonly enteredAt: number;
+}
+
+/** A reading of the day that was struck out. */
+export interface StruckOut {
+  readonly readingId: number;
+  readonly systemCode: string;
+  readonly parameterId: number;
+  readonly typedText: string;
+  readonly typedUnit: string | null;
+  readonly voidedBy: number | null;
+  readonly voidedAt: number | null;
+  readonly reason: string;
+}
+
 /** Something that should have been read on the day and was not. */
 export interface SheetGap {
   readonly systemCode: string;

@@ -3,6 +3,16 @@ import type { ReviewOutcome, SheetCounts, SheetGap, SheetLine, SheetState } from
 /** Later than this after it was taken, a reading was entered late. Common practice, no source. */
 const LATE_MS = 12 * 3_600_000;
 
+/** Entered long after it was taken. */
+export function isLate(line: Pick<SheetLine, "takenAt" | "enteredAt">): boolean {
+  return line.enteredAt - line.takenAt > LATE_MS;
+}
+
+/** Out of tolerance or implausible: must be confirmed or measured again. */
+export function isLineOff(line: Pick<SheetLine, "status">): boolean {
+  return line.status === "out" || line.status === "implausible";
+}
+
 /** Where a sheet stands, from the newest review and the hash of what is there now. */
 export function sheetState(
   newest: { outcome: ReviewOutcome; contentHash: string } | null,
@@ -16,17 +26,16 @@ export function sheetState(
 /** What a lead must know before opening a sheet. */
 export function countSheet(lines: readonly SheetLine[], gaps: readonly SheetGap[]): SheetCounts {
   const count = (test: (line: SheetLine) => boolean): number => lines.filter(test).length;
-  const isOff = (line: SheetLine): boolean => line.status === "out" || line.status === "implausible";
   return {
     readings: lines.length,
     watch: count((line) => line.status === "watch"),
     out: count((line) => line.status === "out"),
     implausible: count((line) => line.status === "implausible"),
     unjudged: count((line) => line.status === "unjudged"),
-    unconfirmed: count((line) => isOff(line) && !line.isConfirmed),
-    unexplained: count((line) => isOff(line) && line.explanations.length === 0),
+    unconfirmed: count((line) => isLineOff(line) && !line.isConfirmed),
+    unexplained: count((line) => isLineOff(line) && line.explanations.length === 0),
     corrected: count((line) => line.supersedesId !== null),
-    late: count((line) => line.enteredAt - line.takenAt > LATE_MS),
+    late: count(isLate),
     gaps: gaps.length,
   };
 }
@@ -40,9 +49,10 @@ export function reviewHindrances(lines: readonly SheetLine[], reviewerId: number
     hindrances.push(`You took or entered ${what} on this sheet; another lead must review it.`);
   }
   for (const line of lines) {
-    const isOff = line.status === "out" || line.status === "implausible";
-    if (isOff && !line.isConfirmed) {
-      hindrances.push(`${line.systemCode} ${line.parameterCode} ${line.typedText} is off and neither confirmed nor measured again.`);
+    if (isLineOff(line) && !line.isConfirmed) {
+      hindrances.push(
+        `${line.systemCode} ${line.parameterCode} ${line.typedText} is off and neither confirmed nor measured again.`,
+      );
     }
   }
   return hindrances;
