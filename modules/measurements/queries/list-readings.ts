@@ -2,6 +2,7 @@ import { and, asc, desc, eq, gte, inArray, lt, or } from "drizzle-orm";
 import { z } from "zod";
 import { notFound } from "@/lib/problem";
 import { defineQuery } from "@/modules/audit";
+import { getParameter } from "@/modules/methods";
 import { pointDirectory } from "@/modules/systems";
 import { measurementsMay } from "../abilities";
 import { approvedVersions } from "../limits";
@@ -119,9 +120,13 @@ export const getReading = defineQuery({
       newest = later?.id;
     }
     const ids = chain.map((each) => each.id);
+    const counts = ctx.db.select({ id: readingInForce.id }).from(readingInForce).where(eq(readingInForce.id, row.id)).get();
     return {
       reading: row,
       place,
+      parameter: getParameter(ctx.db, row.parameterId),
+      /** False once it has been corrected, struck out or withdrawn. */
+      isInForce: counts !== undefined,
       versions: chain,
       judgements: ctx.db.select().from(judgement).where(inArray(judgement.readingId, ids)).orderBy(asc(judgement.id)).all(),
       explanations: ctx.db.select().from(explanation).where(inArray(explanation.readingId, ids)).orderBy(asc(explanation.id)).all(),

@@ -19,7 +19,9 @@ export interface EntryListProps {
 /** What is to be read at one system, point by point in walking order; Enter hands a value over and goes on to the next box. */
 export function EntryList({ rows, entry, now, zone, onEnd, renderIncidentLink }: EntryListProps) {
   const list = useRef<HTMLDivElement>(null);
-  const points = [...new Map(rows.map((row) => [row.pointId, row])).values()];
+  const points = [...new Map(rows.map((row) => [row.pointId, row])).values()].sort(
+    (a, b) => Number(b.isDefaultPoint) - Number(a.isDefaultPoint),
+  );
 
   const goOn = (from: HTMLElement) => {
     const cell = from.closest("[data-cell]")?.getAttribute("data-cell");

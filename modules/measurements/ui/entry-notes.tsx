@@ -94,11 +94,11 @@ function SentNotes({ entry, zone, renderIncidentLink }: EntryNotesProps) {
         <span className="flex flex-wrap items-center justify-end gap-x-1 text-sm text-ink-3">
           <span>
             {STAGE_WORDS[item.stage]}
-            {item.stage === "sent" ? `, taken ${timeText(item.reading.takenAt, zone, "time")}` : ""}
+            {item.stage === "sent" ? ` ${timeText(item.reading.takenAt, zone, "time")}` : ""}
           </span>
           {readingId !== undefined && (
             <Link href={`/readings/${readingId}`} className="btn" data-variant="quiet" data-size="small">
-              Look or correct
+              Correct…
             </Link>
           )}
           <Button variant="quiet" size="small" onClick={anew}>
@@ -143,9 +143,7 @@ function ExplainField({ entry: { item, row, explain } }: { entry: EntryCell }) {
       {said.every((each) => each.stage === "refused") && (
         <form onSubmit={submit} className="flex flex-wrap items-end gap-2">
           <label className="min-w-48 flex-1">
-            <span className="mb-1 block text-sm text-ink-2">
-              Why is {row.parameter.name.toLowerCase()} off?
-            </span>
+            <span className="mb-1 block text-sm text-ink-2">{row.parameter.name}: why is it off?</span>
             <input
               className="control"
               value={text}

@@ -49,7 +49,7 @@ export interface GridState {
 export const EMPTY_GRID: GridState = { drafts: new Map(), past: [], future: [], lastBlock: 0 };
 const MOST_STEPS = 200;
 
-/** Lays a sheet out: a row per point in walking order, a column per parameter in the order in which points list them. */
+/** Lays a sheet out: a row per point in walking order (the default point of a system first), a column per parameter in the order in which points list them. */
 export function layOutSheet(watched: readonly WatchRow[]): Sheet {
   const rows = new Map<number, SheetRow>();
   const units = new Map<number, { name: string; order: number; units: (string | null)[] }>();
@@ -71,7 +71,13 @@ export function layOutSheet(watched: readonly WatchRow[]): Sheet {
   const columns = [...units.entries()]
     .sort(([, a], [, b]) => a.order - b.order || a.name.localeCompare(b.name, "en"))
     .map(([parameterId, { name, units: all }]) => ({ parameterId, name, unit: mostCommon(all) }));
-  return { rows: [...rows.values()], columns, watch };
+  const ordered = [...rows.values()];
+  const systemAt = (row: SheetRow) => ordered.findIndex((each) => each.systemCode === row.systemCode);
+  const walked = ordered
+    .map((row) => ({ row, at: systemAt(row) }))
+    .sort((a, b) => a.at - b.at || Number(b.row.isDefaultPoint) - Number(a.row.isDefaultPoint))
+    .map(({ row }) => row);
+  return { rows: walked, columns, watch };
 }
 
 function mostCommon(units: readonly (string | null)[]): string | null {

@@ -1,4 +1,4 @@
 import { query } from "@/app/_server/handle";
-import { getSeries } from "@/modules/measurements";
+import { listSeriesSlice } from "@/modules/measurements";
 
-export const GET = query(getSeries);
+export const GET = query(listSeriesSlice);
