@@ -1,5 +1,5 @@
 import "server-only";
-import { backUpTask, type ReactionTable, type WorkTable } from "@/modules/audit";
+import { backUpTask, type ReactionTable, verifyCopyTask, type WorkTable } from "@/modules/audit";
 import { judgeSeriesAgain } from "@/modules/measurements";
 import { deliverMail } from "@/modules/notifications";
 import { dailyCheckpoint } from "@/modules/signoff";
@@ -8,4 +8,4 @@ import { dailyCheckpoint } from "@/modules/signoff";
 export const REACTIONS: ReactionTable = {};
 
 /** Everything that the job runner can carry out by name. */
-export const WORK: WorkTable = [deliverMail, dailyCheckpoint, backUpTask, judgeSeriesAgain];
+export const WORK: WorkTable = [deliverMail, dailyCheckpoint, backUpTask, verifyCopyTask, judgeSeriesAgain];

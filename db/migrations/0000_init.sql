@@ -29,9 +29,11 @@ CREATE TABLE `audit_entry` (
 );
 --> statement-breakpoint
 CREATE INDEX `audit_entry_at` ON `audit_entry` (`at`);--> statement-breakpoint
-CREATE INDEX `audit_entry_actor` ON `audit_entry` (`actor_id`,`id`);--> statement-breakpoint
-CREATE INDEX `audit_entry_verb` ON `audit_entry` (`verb`,`id`);--> statement-breakpoint
-CREATE INDEX `audit_entry_subject` ON `audit_entry` (`subject_type`,`subject_id`,`id`);--> statement-breakpoint
+CREATE INDEX `audit_entry_actor` ON `audit_entry` (`actor_id`,`at`);--> statement-breakpoint
+CREATE INDEX `audit_entry_verb` ON `audit_entry` (`verb`,`at`);--> statement-breakpoint
+CREATE INDEX `audit_entry_actor_verb` ON `audit_entry` (`actor_id`,`verb`,`at`);--> statement-breakpoint
+CREATE INDEX `audit_entry_subject` ON `audit_entry` (`subject_type`,`subject_id`,`at`);--> statement-breakpoint
+CREATE INDEX `audit_entry_subject_type` ON `audit_entry` (`subject_type`,`at`);--> statement-breakpoint
 CREATE TABLE `audit_idempotency` (
 	`key` text PRIMARY KEY NOT NULL,
 	`actor_id` integer,
@@ -57,6 +59,19 @@ CREATE TABLE `audit_job` (
 --> statement-breakpoint
 CREATE INDEX `audit_job_due` ON `audit_job` (`run_at`) WHERE "audit_job"."done_at" is null and "audit_job"."failed_at" is null;--> statement-breakpoint
 CREATE UNIQUE INDEX `audit_job_id_kind` ON `audit_job` (`id`,`kind`);--> statement-breakpoint
+CREATE TABLE `audit_verification` (
+	`id` integer PRIMARY KEY NOT NULL,
+	`asked_by` integer,
+	`asked_at` integer NOT NULL,
+	`finished_at` integer,
+	`entries` integer,
+	`head_entry_id` integer,
+	`head_hash` text,
+	`finding_count` integer,
+	`findings` text DEFAULT '[]' NOT NULL,
+	`trouble` text
+);
+--> statement-breakpoint
 CREATE TABLE `identity_area_binding` (
 	`id` integer PRIMARY KEY NOT NULL,
 	`person_id` integer NOT NULL,
@@ -220,6 +235,7 @@ CREATE TABLE `imports_staged_row` (
 	`taken_at` integer,
 	`value` real,
 	`qualifier` text,
+	`answer` text,
 	`identity` text,
 	`expected_status` text,
 	`expected_sentence` text

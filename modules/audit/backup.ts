@@ -47,13 +47,10 @@ function mustBeSound(file: string): { id: number; hash: string } {
 
 /**
  * Copies the database while it is in use, from the writing connection itself (a copy from another connection would begin
- * anew at every write), checks the copy, puts it in place under its name at once, and notes it in the history.
+ * anew at every write), checks the copy, and puts it in place under its name at once.
+ * @throws Error when the copy is not sound; nothing is left under the name then
  */
-export async function backUpDatabase(
-  db: Database,
-  clock: Clock,
-  target: string,
-): Promise<{ sha256: string; bytes: number; headEntryId: number }> {
+export async function copyDatabase(db: Database, target: string): Promise<{ id: number; hash: string }> {
   await mkdir(path.dirname(target), { recursive: true });
   const part = `${target}.part`;
   await rm(part, { force: true });
@@ -61,6 +58,16 @@ export async function backUpDatabase(
   const head = mustBeSound(part);
   await rm(`${part}-journal`, { force: true });
   await rename(part, target);
+  return head;
+}
+
+/** Makes a backup: copies the database while it is in use, and notes the copy with its hash in the history. */
+export async function backUpDatabase(
+  db: Database,
+  clock: Clock,
+  target: string,
+): Promise<{ sha256: string; bytes: number; headEntryId: number }> {
+  const head = await copyDatabase(db, target);
   const [sha256, { size: bytes }] = [await fileSha256(target), await stat(target)];
   const input = { fileName: path.basename(target), sha256, bytes, headEntryId: head.id, headHash: head.hash };
   runCommand(db, SYSTEM_ACTOR, recordBackup, input, { clock });

@@ -1,5 +1,6 @@
 import { sql } from "drizzle-orm";
 import { index, integer, sqliteTable, text, uniqueIndex } from "drizzle-orm/sqlite-core";
+import type { Finding } from "./verify";
 
 /** One command that was carried out. Never updated, never deleted; `hash` covers the entry, its changes and `prevHash`. */
 export const auditEntry = sqliteTable(
@@ -22,10 +23,13 @@ export const auditEntry = sqliteTable(
     hash: text("hash").notNull(),
   },
   (table) => [
+    // Each search of the history has an index that also gives its order (time, then number).
     index("audit_entry_at").on(table.at),
-    index("audit_entry_actor").on(table.actorId, table.id),
-    index("audit_entry_verb").on(table.verb, table.id),
-    index("audit_entry_subject").on(table.subjectType, table.subjectId, table.id),
+    index("audit_entry_actor").on(table.actorId, table.at),
+    index("audit_entry_verb").on(table.verb, table.at),
+    index("audit_entry_actor_verb").on(table.actorId, table.verb, table.at),
+    index("audit_entry_subject").on(table.subjectType, table.subjectId, table.at),
+    index("audit_entry_subject_type").on(table.subjectType, table.at),
   ],
 );
 
@@ -78,3 +82,19 @@ export const auditJob = sqliteTable(
     uniqueIndex("audit_job_id_kind").on(table.id, table.kind),
   ],
 );
+
+/** One check of the whole history that a person asked for on screen, and what it found. */
+export const auditVerification = sqliteTable("audit_verification", {
+  id: integer("id").primaryKey(),
+  askedBy: integer("asked_by"),
+  askedAt: integer("asked_at").notNull(),
+  finishedAt: integer("finished_at"),
+  /** Entries in the copy that was checked, and its newest entry's number and hash. */
+  entries: integer("entries"),
+  headEntryId: integer("head_entry_id"),
+  headHash: text("head_hash"),
+  findingCount: integer("finding_count"),
+  findings: text("findings", { mode: "json" }).$type<Finding[]>().notNull().default([]),
+  /** Why the check itself could not be made. */
+  trouble: text("trouble"),
+});

@@ -13,7 +13,9 @@ export { preferUnits } from "./commands/prefer-units";
 export { reinstatePerson } from "./commands/reinstate-person";
 export { repeatInvitation } from "./commands/repeat-invitation";
 export { endSession } from "./commands/start-session";
+export { setPassword } from "./commands/set-password";
 export { suspendPerson } from "./commands/suspend-person";
+export { identityEvents } from "./events";
 export { findOpenLink } from "./links";
 export { addressesOf, findActivePerson, mustBeAnother } from "./people";
 export {

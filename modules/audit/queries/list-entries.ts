@@ -1,16 +1,18 @@
-import { and, asc, desc, eq, gte, inArray, lt, type SQL } from "drizzle-orm";
+import { and, asc, desc, eq, gte, isNull, lt, type SQL, sql } from "drizzle-orm";
 import { z } from "zod";
-import { notFound } from "@/lib/problem";
+import type { Orm } from "@/db/database";
 import { auditMay } from "../abilities";
 import { defineQuery } from "../define-query";
-import { auditChange, auditEntry } from "../schema";
+import { auditEntry } from "../schema";
 
 const id = z.coerce.number().int().positive();
 const moment = z.coerce.number().int();
 
-/** What the history is searched by. Empty search boxes count as not given. */
+/** What the history is searched by. */
 export const historyFilter = z.strictObject({
+  /** Acts of one person; `actorKind` "system" finds what the product did by itself. */
   personId: id.optional(),
+  actorKind: z.enum(["system"]).optional(),
   verb: z.string().max(80).optional(),
   subjectType: z.string().max(40).optional(),
   subjectId: z.string().max(80).optional(),
@@ -18,12 +20,13 @@ export const historyFilter = z.strictObject({
   toAt: moment.optional(),
 });
 
-type Filter = z.output<typeof historyFilter>;
+export type HistoryFilter = z.output<typeof historyFilter>;
 
-/** The condition of a search; every part of it has an index that also orders by id. */
-export function filterCondition(filter: Filter): SQL | undefined {
+/** The condition of a search; every part of it has an index that also orders by time. */
+export function filterCondition(filter: HistoryFilter): SQL | undefined {
   return and(
     filter.personId === undefined ? undefined : eq(auditEntry.actorId, filter.personId),
+    filter.actorKind === undefined ? undefined : isNull(auditEntry.actorId),
     filter.verb === undefined ? undefined : eq(auditEntry.verb, filter.verb),
     filter.subjectType === undefined ? undefined : eq(auditEntry.subjectType, filter.subjectType),
     filter.subjectId === undefined ? undefined : eq(auditEntry.subjectId, filter.subjectId),
@@ -32,88 +35,87 @@ export function filterCondition(filter: Filter): SQL | undefined {
   );
 }
 
-/** Entries of the history, newest first; keyset paging by entry number, so that page 9,000 is as quick as the first. */
+const momentOf = (entryId: number): SQL => sql`(select at from audit_entry where id = ${entryId})`;
+
+const olderThan = (entryId: number): SQL =>
+  sql`(${auditEntry.at}, ${auditEntry.id}) < (${momentOf(entryId)}, ${entryId})`;
+const newerThan = (entryId: number): SQL =>
+  sql`(${auditEntry.at}, ${auditEntry.id}) > (${momentOf(entryId)}, ${entryId})`;
+
+/** What lists and files show of an entry. */
+const listed = {
+  id: auditEntry.id,
+  at: auditEntry.at,
+  verb: auditEntry.verb,
+  actorKind: auditEntry.actorKind,
+  actorId: auditEntry.actorId,
+  subjectType: auditEntry.subjectType,
+  subjectId: auditEntry.subjectId,
+  reason: auditEntry.reason,
+  changeCount: auditEntry.changeCount,
+  hash: auditEntry.hash,
+};
+
+/**
+ * Entries of the history, newest first; the next page begins where the last one ended (keyset), so that page 9,000 is as
+ * quick as the first. `before` and `after` are entry numbers.
+ */
 export const listEntries = defineQuery({
   name: "listEntries",
   permission: auditMay.readHistory,
   input: historyFilter.extend({
     before: id.optional(),
     after: id.optional(),
-    limit: z.coerce.number().int().min(1).max(200).default(50),
+    limit: z.coerce.number().int().min(1).max(1000).default(50),
   }),
   run(ctx, { before, after, limit, ...filter }) {
+    const upwards = after !== undefined;
+    const order = upwards ? asc : desc;
     const rows = ctx.db
-      .select()
+      .select(listed)
       .from(auditEntry)
       .where(
         and(
           filterCondition(filter),
-          before === undefined ? undefined : lt(auditEntry.id, before),
-          after === undefined ? undefined : gte(auditEntry.id, after + 1),
+          before === undefined ? undefined : olderThan(before),
+          after === undefined ? undefined : newerThan(after),
         ),
       )
-      .orderBy(after === undefined ? desc(auditEntry.id) : asc(auditEntry.id))
+      .orderBy(order(auditEntry.at), order(auditEntry.id))
       .limit(limit + 1)
       .all();
-    const page = rows.slice(0, limit);
-    if (after !== undefined) page.reverse();
-    return { entries: page, hasMore: rows.length > limit };
+    const entries = rows.slice(0, limit);
+    if (upwards) entries.reverse();
+    return { entries, hasMore: rows.length > limit };
   },
 });
+
+export type ListedEntry = ReturnType<typeof listEntries.run>["entries"][number];
+
+/** Each value of an indexed column once, by hopping through its index from one value to the next. */
+function valuesOf(db: Orm, column: SQL): string[] {
+  const rows = db.all<{ value: string | null }>(sql`
+    with recursive hop(value) as (
+      select min(${column}) from audit_entry
+      union all
+      select (select min(${column}) from audit_entry where ${column} > hop.value) from hop where hop.value is not null
+    )
+    select value from hop where value is not null`);
+  return rows.map((row) => String(row.value));
+}
 
 /** The verbs that occur in the history, for the search. */
 export const listVerbs = defineQuery({
   name: "listVerbs",
   permission: auditMay.readHistory,
   input: z.strictObject({}),
-  run(ctx): string[] {
-    return ctx.db.selectDistinct({ verb: auditEntry.verb }).from(auditEntry).orderBy(asc(auditEntry.verb)).all().map((row) => row.verb);
-  },
+  run: (ctx): string[] => valuesOf(ctx.db, sql.raw("verb")),
 });
 
-/** How many changes of an entry are shown at once; an entry may have thousands. */
-const CHANGES_SHOWN = 200;
-
-/** One entry with its changes, before and after. */
-export const getEntry = defineQuery({
-  name: "getEntry",
+/** The kinds of subjects that occur in the history, for the search. */
+export const listSubjectTypes = defineQuery({
+  name: "listSubjectTypes",
   permission: auditMay.readHistory,
-  input: z.strictObject({ entryId: id, afterChange: z.coerce.number().int().min(0).default(0) }),
-  run(ctx, { entryId, afterChange }) {
-    const entry = ctx.db.select().from(auditEntry).where(eq(auditEntry.id, entryId)).get();
-    if (!entry) throw notFound("such entry");
-    const changes = ctx.db
-      .select()
-      .from(auditChange)
-      .where(and(eq(auditChange.entryId, entryId), gte(auditChange.id, afterChange + 1)))
-      .orderBy(asc(auditChange.id))
-      .limit(CHANGES_SHOWN + 1)
-      .all();
-    return { entry, changes: changes.slice(0, CHANGES_SHOWN), hasMore: changes.length > CHANGES_SHOWN };
-  },
-});
-
-/** Tables whose records only those who may read the whole history see, since they tell of people. */
-const PERSONAL_TABLES = /^identity_/;
-
-/** The history of one record: each change with its entry, oldest first. */
-export const getRecordHistory = defineQuery({
-  name: "getRecordHistory",
-  permission: auditMay.readRecord,
-  input: z.strictObject({ table: z.string().regex(/^[a-z_]+$/), key: z.string().max(120) }),
-  run(ctx, { table, key }) {
-    const mayReadPeople = ctx.actor.roles.some((role) => auditMay.readHistory.roles[role] !== undefined);
-    if (PERSONAL_TABLES.test(table) && !mayReadPeople) throw notFound("such record");
-    const changes = ctx.db
-      .select()
-      .from(auditChange)
-      .where(and(eq(auditChange.tableName, table), eq(auditChange.rowKey, key)))
-      .orderBy(asc(auditChange.id))
-      .limit(1000)
-      .all();
-    if (changes.length === 0) throw notFound("such record");
-    const ids = [...new Set(changes.map((change) => change.entryId))];
-    const entries = ctx.db.select().from(auditEntry).where(inArray(auditEntry.id, ids)).all();
-    return { table, key, changes, entries };
-  },
+  input: z.strictObject({}),
+  run: (ctx): string[] => valuesOf(ctx.db, sql.raw("subject_type")),
 });
