@@ -10,7 +10,7 @@ const NOT_OURS = ["node_modules", "data", "build", "test-results", "playwright-r
 const DRAWERS = /(^|\/)(utils?|helpers?|common|misc|types)([./]|$)/;
 const KEBAB = /^[a-z0-9]+(-[a-z0-9]+)*(\.[a-z0-9]+(-[a-z0-9]+)*)*$/;
 /** Next's own ways to write a route: [id], [...rest], (group), @slot, _private. */
-const ROUTE = /^([[(@_.]*)([a-z0-9-]+)([\])]*)$/;
+const ROUTE = /^([(@_.]*[a-z0-9-]+\)?|\[{1,2}(\.{3})?[a-z][A-Za-z0-9]*\]{1,2})$/;
 
 function filesUnder(folder: string): string[] {
   const start = path.join(root, folder);
@@ -44,7 +44,7 @@ describe("the shape of the house", () => {
     expect(sources.filter((file) => DRAWERS.test(file))).toEqual([]);
   });
 
-  it("names are written in kebab-case", () => {
+  it("names are written in kebab-case, a route's parameter as the field it becomes", () => {
     const code = sources.filter((file) => /\.(tsx?|mjs)$/.test(file));
     const odd = code.filter((file) => {
       const parts = file.split("/");
