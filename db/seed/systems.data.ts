@@ -67,13 +67,13 @@ const temperature = (base: number, season: number, twice = false): SeriesSeed =>
   twice,
   limits: around(base, 1.2 + season, 2 + season, 1.2),
 });
-const salinity = (base = 34.4): SeriesSeed => ({
+const salinity = (base = 34.4, target = 34.5): SeriesSeed => ({
   parameter: "salinity",
   everyDays: 1,
   base,
   noise: 0.18,
   memory: 0.75,
-  limits: around(34.5, 0.9, 1.5, 1),
+  limits: around(target, 0.9, 1.5, 1),
 });
 const ph = (base = 8.1): SeriesSeed => ({
   parameter: "ph_nbs",
@@ -311,7 +311,7 @@ export const SYSTEMS: readonly SystemSeed[] = [
     points: main,
     tank: { round: [1.8, 0.95] },
     equipment: [["P1", "Circulation pump 1", "pump"]],
-    series: [temperature(15.8, 0.2), salinity(33.2), ph(8.06), oxygen(7.5), pump, ammonia],
+    series: [temperature(15.8, 0.2), salinity(33.6), ph(8.06), oxygen(7.5), pump, ammonia],
   },
   {
     code: "JELLY-02",
@@ -363,7 +363,7 @@ export const SYSTEMS: readonly SystemSeed[] = [
     equipment: pumpAnd(),
     series: [
       temperature(24, 0.2),
-      salinity(31.8),
+      salinity(31.8, 32),
       ph(7.98),
       oxygen(6.9),
       pump,
