@@ -7,7 +7,7 @@ export { askForBackup } from "./commands/ask-for-backup";
 export { askForVerification } from "./commands/ask-for-verification";
 export { retryJob } from "./commands/retry-job";
 export { headOfFile, mergeWriteAheadLog, verifyFile } from "./database-files";
-export { type Command, type CommandContext, type CommandOutcome, defineCommand } from "./define-command";
+export { type Command, type CommandContext, type CommandOutcome, defineCommand, type QueuedWork } from "./define-command";
 export { ask, defineQuery, type Query, type QueryContext } from "./define-query";
 export { auditEvents } from "./events";
 export { insertJob, type Reaction, type ReactionTable, useReactions } from "./jobs/queue";

@@ -98,6 +98,8 @@ export const stagedRow = sqliteTable(
     takenAt: integer("taken_at"),
     value: real("value"),
     qualifier: text("qualifier"),
+    /** The code of an answer, or a text. */
+    answer: text("answer"),
     /** Point, parameter, moment, value and qualifier as one text; the same again in one file is a duplicate. */
     identity: text("identity"),
     expectedStatus: text("expected_status"),

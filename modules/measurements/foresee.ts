@@ -1,4 +1,4 @@
-import { and, eq } from "drizzle-orm";
+import { and, eq, sql } from "drizzle-orm";
 import type { Orm } from "@/db/database";
 import { nearlyEqual } from "@/lib/nearly";
 import type { IntakeCache } from "./intake-cache";
@@ -40,10 +40,12 @@ export type EqualReading = { id: number; sourceRef: string | null };
 const isSameNumber = (a: number | null, b: number | null): boolean =>
   a === null || b === null ? a === b : nearlyEqual(a, b);
 
-/** The reading in force that says exactly this: same point, parameter, moment, value and qualifier; or null. */
-export function findEqualInForce(db: Orm, offered: OfferedReading): EqualReading | null {
-  const { pointId, parameterId, takenAt, value, qualifier, answer } = offered;
-  const rows = db
+/**
+ * Finds the reading in force that says exactly this: same point, parameter, moment, value and qualifier; null where there
+ * is none. Prepared once for many questions.
+ */
+export function equalFinder(db: Orm): (offered: OfferedReading) => EqualReading | null {
+  const atMoment = db
     .select({
       id: readingInForce.id,
       value: readingInForce.value,
@@ -54,14 +56,17 @@ export function findEqualInForce(db: Orm, offered: OfferedReading): EqualReading
     .from(readingInForce)
     .where(
       and(
-        eq(readingInForce.pointId, pointId),
-        eq(readingInForce.parameterId, parameterId),
-        eq(readingInForce.takenAt, takenAt),
+        eq(readingInForce.pointId, sql.placeholder("pointId")),
+        eq(readingInForce.parameterId, sql.placeholder("parameterId")),
+        eq(readingInForce.takenAt, sql.placeholder("takenAt")),
       ),
     )
-    .all();
-  const same = rows.find(
-    (row) => row.qualifier === qualifier && row.answer === answer && isSameNumber(row.value, value),
-  );
-  return same ? { id: same.id, sourceRef: same.sourceRef } : null;
+    .prepare();
+  return ({ pointId, parameterId, takenAt, value, qualifier, answer }) => {
+    const rows = atMoment.all({ pointId, parameterId, takenAt });
+    const same = rows.find(
+      (row) => row.qualifier === qualifier && row.answer === answer && isSameNumber(row.value, value),
+    );
+    return same ? { id: same.id, sourceRef: same.sourceRef } : null;
+  };
 }
