@@ -22,15 +22,19 @@ const whole = (min: number, max: number, message: string) =>
   });
 const id = whole(1, Number.MAX_SAFE_INTEGER, "Choose one from the list.");
 const code = z
-  .string()
+  .string("Give a code, such as KELP-01.")
   .trim()
   .toUpperCase()
   .regex(/^[A-Z0-9][A-Z0-9-]{0,19}$/, "Use 1 to 20 letters, figures and hyphens, such as KELP-01.");
-const name = z.string().trim().min(1, "Write a name.").max(80, "Keep the name under 80 characters.");
+const name = z
+  .string("Write a name.")
+  .trim()
+  .min(1, "Write a name.")
+  .max(80, "Keep the name under 80 characters.");
 const order = whole(0, 9999, "The walking order is a whole number from 0 to 9999.");
 const notes = z.string().trim().max(2000, "Keep notes under 2,000 characters.").default("");
 const reason = z
-  .string()
+  .string("Say why, in a few words.")
   .trim()
   .min(3, "Say why, in a few words.")
   .max(500, "Keep the reason under 500 characters.");

@@ -89,7 +89,9 @@ function Determination({
           </ButtonRow>
         )}
         {row.status === "proposed" && (isOwn || !mayApprove) && (
-          <p className="font-semibold">Waits for a water-quality lead{isOwn ? " other than you" : ""}.</p>
+          <p className="font-semibold">
+            Waits for a water-quality lead{isOwn && mayApprove ? " other than you" : ""}.
+          </p>
         )}
       </div>
     </Panel>

@@ -129,13 +129,18 @@ function VolumeFacts({ sheet, units }: { sheet: VolumeSheet; units: ReadingUnits
 }
 
 function LevelNotices({ sheet, zone }: { sheet: VolumeSheet; zone: string }) {
-  const { level, operatingSays, record, joinedWith, joinedElsewhere } = sheet;
+  const { level, operatingSays, record, joinedWith, joinedElsewhere, joinedTotal } = sheet;
   const names = joinedWith.map((each) => each.code);
   if (joinedElsewhere > 0) names.push(`${joinedElsewhere} in areas that you do not see`);
   return (
     <>
       {level && <LevelNotice level={level} zone={zone} />}
-      {names.length > 0 && <Notice title={`Shares its water with ${names.join(", ")}`} />}
+      {names.length > 0 && (
+        <Notice title={`Shares its water with ${names.join(", ")}`}>
+          {joinedTotal === null &&
+            "What they hold together cannot be told: one of them cannot be counted today."}
+        </Notice>
+      )}
       {operatingSays !== null && record && (
         <Notice title="What it holds today cannot be told">{operatingSays}</Notice>
       )}

@@ -9,9 +9,11 @@ export function VolumeQuantity({ volumeL, unit }: { volumeL: Measured | null; un
   return (
     <span className="whitespace-nowrap">
       <Quantity value={value} decimals={decimals} unit={unit} />
-      <span className="ml-2 text-sm font-normal text-ink-3">
-        {expanded === 0 ? "no uncertainty given" : `± ${numberText(expanded, decimals)} (k = 2)`}
-      </span>
+      {value !== 0 && (
+        <span className="ml-2 text-sm font-normal text-ink-3">
+          {expanded === 0 ? "no uncertainty given" : `± ${numberText(expanded, decimals)} (k = 2)`}
+        </span>
+      )}
     </span>
   );
 }

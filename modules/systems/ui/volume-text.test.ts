@@ -8,6 +8,7 @@ describe("a volume on screen", () => {
     [1000, 5, "L", { value: 1000, expanded: 10, decimals: 0 }],
     [1000.44, 0.55, "L", { value: 1000.4, expanded: 1.1, decimals: 1 }],
     [303_185, 1937.5, "L", { value: 303_200, expanded: 3900, decimals: 0 }],
+    [0, 0, "L", { value: 0, expanded: 0, decimals: 0 }],
     [310_432, 3050, "m³", { value: 310.4, expanded: 6.1, decimals: 1 }],
   ] as const)("%d L with a standard uncertainty of %d L in %s", (value, standardUncertainty, unit, shown) => {
     expect(shownVolume({ value, standardUncertainty }, unit)).toEqual(shown);

@@ -8,7 +8,7 @@ const MOST_DECIMALS = 3;
 
 /** The place (power of ten) of the last of so many significant figures; no finer than three decimals. */
 function lastPlace(value: number, figures: number): number {
-  const first = value === 0 ? 0 : Math.floor(Math.log10(Math.abs(value)));
+  const first = Math.floor(Math.log10(Math.abs(value)));
   return Math.max(-MOST_DECIMALS, first - figures + 1);
 }
 
@@ -26,6 +26,7 @@ function roundedAt(value: number, place: number): ShownNumber {
  * @example plainVolume(303185) // { value: 303200, decimals: 0 }
  */
 export function plainVolume(value: number): ShownNumber {
+  if (value === 0) return { value, decimals: 0 };
   return roundedAt(value, lastPlace(value, 4));
 }
 
