@@ -4,6 +4,9 @@ import type { Crumb } from "@/lib/ui";
 const PATH_WORDS: Readonly<Record<string, string>> = {
   account: "Your account",
   people: "People",
+  change: "Change",
+  watch: "What is read where",
+  workbooks: "Changes",
   deputies: "Deputies",
   outbox: "Mail",
   roles: "Roles",

@@ -1,8 +1,8 @@
 import type { FacilityParameter, ParameterKind, PlausibleBounds } from "@/modules/methods/model";
 
-export type { ParameterKind, PlausibleBounds };
 export { formatNumber, formatValue } from "./rules/format-value";
 export { type ShownValue, shownValue } from "./rules/shown-value";
+export type { ParameterKind, PlausibleBounds };
 
 /** The server's judgement of a reading; codes as stored, words in `STATUS_WORDS`. */
 export const STATUSES = ["within", "watch", "out", "implausible", "unjudged", "none"] as const;
@@ -244,4 +244,47 @@ export interface WatchPlanRow {
   readonly unit: string | null;
   readonly methodId: number | null;
   readonly instrumentId: number | null;
+}
+
+/** Limits by parameter under a name, to be laid on many systems at once. */
+export interface LimitTemplateRow {
+  readonly id: number;
+  readonly name: string;
+  readonly note: string;
+  readonly rows: readonly { readonly parameterId: number; readonly shape: LimitShape }[];
+}
+
+/** A workbook of limits: rows proposed, and decided on, in one act. */
+export interface LimitWorkbookRow {
+  readonly id: number;
+  readonly title: string;
+  readonly reason: string;
+  readonly state: LimitState;
+  readonly proposedBy: number;
+  readonly proposedAt: number;
+  readonly decidedBy: number | null;
+  readonly decidedAt: number | null;
+}
+
+/** A workbook with its rows, each with what was in force before it, and the signatures under it. */
+export interface LimitWorkbookDetail {
+  readonly workbook: LimitWorkbookRow;
+  readonly rows: readonly {
+    readonly id: number;
+    readonly parameterId: number;
+    readonly effectiveFromAt: number;
+    readonly effectiveToAt: number | null;
+    readonly shape: LimitShape;
+    readonly suspendedReason: string | null;
+    readonly place: { readonly systemCode: string; readonly pointName: string } | null;
+    readonly before: { readonly shape: LimitShape; readonly suspendedReason: string | null } | null;
+  }[];
+  readonly signatures: readonly {
+    readonly id: number;
+    readonly printedName: string;
+    readonly signedAt: number;
+    readonly meaning: string;
+    readonly comment: string | null;
+    readonly holds: boolean | null;
+  }[];
 }

@@ -15,5 +15,6 @@ export { allParameters, findParameterByCode, getParameter } from "./parameters";
 export { getInstrument, listInstruments } from "./queries/list-instruments";
 export { listMethods } from "./queries/list-methods";
 export { listCatalogue, listParameters } from "./queries/list-parameters";
+export { getInstrumentById, getMethod } from "./records";
 export { toCanonical } from "./rules/to-canonical";
 export { parameterDirectory } from "./views";

@@ -1,5 +1,6 @@
 import type { Permission } from "@/modules/access";
 import { identityMay } from "@/modules/identity";
+import { measurementsMay } from "@/modules/measurements";
 import { methodsMay } from "@/modules/methods";
 import { notificationsMay } from "@/modules/notifications";
 import { systemsMay } from "@/modules/systems";
@@ -60,6 +61,18 @@ export const SETUP: readonly SetupGroup[] = [
   {
     title: "What is measured",
     sections: [
+      {
+        href: "/setup/watch",
+        label: "What is read where",
+        says: "The parameters that are read at each point, in which order, how often, and with what.",
+        for: [measurementsMay.read],
+      },
+      {
+        href: "/setup/limits",
+        label: "Limits",
+        says: "What each reading is judged by: in force, proposed, and every version before.",
+        for: [measurementsMay.read],
+      },
       {
         href: "/setup/parameters",
         label: "Parameters",
