@@ -8,13 +8,13 @@ export interface ChartPoint {
   value: number;
   status?: StatusCode;
   direction?: StatusDirection;
-  /** How it came about, said in the reading-out ("corrected", "derived", "logger"). */
+  /** How it came about, said in the reading-out ("corrected", "less than"); drawn as a hollow circle. */
   kind?: string;
   /** A rule met at this point; drawn as a hollow square around it. */
   flag?: string;
 }
 
-/** The tolerance over a stretch of time; `…AtEnd` makes it a ramp, a missing side is open. */
+/** The tolerance over a stretch of time and the watch limits inside it; `…AtEnd` makes a ramp, a missing side is open. */
 export interface BandSegment {
   from: number;
   to: number;
@@ -22,6 +22,10 @@ export interface BandSegment {
   high?: number | null;
   lowAtEnd?: number | null;
   highAtEnd?: number | null;
+  watchLow?: number | null;
+  watchHigh?: number | null;
+  watchLowAtEnd?: number | null;
+  watchHighAtEnd?: number | null;
 }
 
 /** Statistical lines over a stretch of time; never confused with tolerance: dashed, in the colour of water. */
@@ -63,6 +67,7 @@ export function valueRange({ points, band = [], control = [] }: ChartData): [num
   const values = [
     ...points.filter((p) => p.status !== "implausible").map((p) => p.value),
     ...band.flatMap((s) => [s.low, s.high, s.lowAtEnd, s.highAtEnd]),
+    ...band.flatMap((s) => [s.watchLow, s.watchHigh, s.watchLowAtEnd, s.watchHighAtEnd]),
     ...control.flatMap((s) => [s.centre, s.lower, s.upper]),
   ].filter((x) => x !== null && x !== undefined);
   if (values.length === 0) return [0, 1];

@@ -155,7 +155,12 @@ function symbolOf(point: ChartPoint, dense: boolean, colours: ChartPalette): obj
         itemStyle: { color: colours["out-mark"], borderColor: colours.field, borderWidth: 1 },
       };
     default:
-      return { symbol: "circle", symbolSize: dense ? 0 : 4 };
+      if (point.kind === undefined) return { symbol: "circle", symbolSize: dense ? 0 : 4 };
+      return {
+        symbol: "circle",
+        symbolSize: 8,
+        itemStyle: { color: colours.field, borderColor: colours.ink, borderWidth: 1.5 },
+      };
   }
 }
 

@@ -9,6 +9,7 @@ export const CHART_TOKENS = [
   "ink-3",
   "water",
   "band",
+  "shoulder",
   "watch-mark",
   "out-mark",
   "odd-mark",

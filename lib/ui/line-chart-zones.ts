@@ -1,5 +1,5 @@
 import type { CustomSeriesRenderItem } from "echarts";
-import { type ChartData, type ChartWords, spread } from "./line-chart-model";
+import { type BandSegment, type ChartData, type ChartWords, spread, timeRange } from "./line-chart-model";
 import type { ChartPalette } from "./line-chart-palette";
 import { numberText } from "./number-text";
 
@@ -24,33 +24,48 @@ const stroke = (api: RenderApi, { from, to }: Line, style: object) => {
   return { type: "line" as const, shape: { x1, y1, x2, y2 }, style };
 };
 
-/** The tolerance: its area, and hard lines where a side has a limit. */
+type Corner = (at: number, y: number | null | undefined, edge: number) => number[];
+
+/** The area between two edges of a segment; an edge without a limit lies at the rim of the drawing. */
+function zone(corner: Corner, s: BandSegment, above: ZoneEdge, below: ZoneEdge, fill: string) {
+  const points = [
+    corner(s.from, above.start, above.rim),
+    corner(s.to, above.end, above.rim),
+    corner(s.to, below.end, below.rim),
+    corner(s.from, below.start, below.rim),
+  ];
+  return { type: "polygon" as const, shape: { points }, style: { fill, opacity: 0.85 } };
+}
+
+interface ZoneEdge {
+  start: number | null | undefined;
+  end: number | null | undefined;
+  rim: number;
+}
+
+/** The tolerance: its area, the watch limits as darker shoulders inside it, and hard lines where a side has a limit. */
 export function bandSeries({ band = [] }: ChartData, colours: ChartPalette): object {
   return custom("band", 1, (params, api) => {
     const area = params.coordSys as unknown as { y: number; height: number };
     const line = { stroke: colours["ink-2"], lineWidth: 1.3, fill: "none" };
+    const corner: Corner = (at, y, edge) => {
+      const [px = 0, py = 0] = api.coord([at, y ?? 0]);
+      return [px, y === null || y === undefined ? edge : py];
+    };
     const children = band.flatMap((s) => {
-      const lowEnd = s.lowAtEnd ?? s.low;
-      const highEnd = s.highAtEnd ?? s.high;
-      const corner = (at: number, y: number | null | undefined, edge: number) => {
-        const [px = 0, py = 0] = api.coord([at, y ?? 0]);
-        return [px, y === null || y === undefined ? edge : py];
-      };
-      const bottom = area.y + area.height;
-      const points = [
-        corner(s.from, s.high, area.y),
-        corner(s.to, highEnd, area.y),
-        corner(s.to, lowEnd, bottom),
-        corner(s.from, s.low, bottom),
-      ];
+      const rims = { top: area.y, bottom: area.y + area.height };
+      const high = { start: s.high, end: s.highAtEnd ?? s.high, rim: rims.top };
+      const low = { start: s.low, end: s.lowAtEnd ?? s.low, rim: rims.bottom };
+      const watchHigh = { start: s.watchHigh, end: s.watchHighAtEnd ?? s.watchHigh, rim: rims.top };
+      const watchLow = { start: s.watchLow, end: s.watchLowAtEnd ?? s.watchLow, rim: rims.bottom };
+      const hard = [low, high].flatMap(({ start, end }) =>
+        start != null && end != null ? [stroke(api, { from: [s.from, start], to: [s.to, end] }, line)] : [],
+      );
       return [
-        { type: "polygon" as const, shape: { points }, style: { fill: colours.band, opacity: 0.85 } },
-        ...(s.low != null && lowEnd != null
-          ? [stroke(api, { from: [s.from, s.low], to: [s.to, lowEnd] }, line)]
-          : []),
-        ...(s.high != null && highEnd != null
-          ? [stroke(api, { from: [s.from, s.high], to: [s.to, highEnd] }, line)]
-          : []),
+        ...(s.low != null || s.high != null ? [zone(corner, s, high, low, colours.band)] : []),
+        ...(s.watchHigh != null ? [zone(corner, s, high, watchHigh, colours.shoulder)] : []),
+        ...(s.watchLow != null ? [zone(corner, s, watchLow, low, colours.shoulder)] : []),
+        ...hard,
       ];
     });
     return { type: "group", $mergeChildren: false, children } as ReturnType<CustomSeriesRenderItem>;
@@ -127,14 +142,11 @@ export function markSeries({ marks = [] }: ChartData, colours: ChartPalette): ob
   );
 }
 
-/** The names of the lines at the right edge, kept apart. */
-export function labelSeries(
-  { band = [], control = [] }: ChartData,
-  words: ChartWords,
-  colours: ChartPalette,
-): object {
-  const b = band.at(-1);
-  const c = control.at(-1);
+/** The names of the lines that reach the right edge, kept apart. */
+export function labelSeries(data: ChartData, words: ChartWords, colours: ChartPalette): object {
+  const [, end] = timeRange(data);
+  const b = data.band?.findLast((segment) => segment.from <= end && segment.to >= end);
+  const c = data.control?.findLast((segment) => segment.from <= end && segment.to >= end);
   const figure = (y: number) => numberText(y, words.decimals);
   const wanted = [
     { y: b?.highAtEnd ?? b?.high, text: "tolerance", colour: colours["ink-2"] },
