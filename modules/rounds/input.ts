@@ -20,3 +20,9 @@ export const reviewDaysInput = z.strictObject({
     .min(1, "Choose at least one sheet.")
     .max(100, "Review at most 100 sheets at once."),
 });
+
+/** What the dialog asks of whoever signs. */
+export const reviewFormInput = z.strictObject({
+  comment: z.string().trim().max(1000, "Keep the comment under 1,000 characters."),
+  password: z.string().min(1, "Type your password: it is your signature."),
+});
