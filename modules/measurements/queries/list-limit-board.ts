@@ -96,7 +96,11 @@ export const listLimitBoard = defineQuery({
   run(ctx, { systemId }): LimitBoardRow[] {
     const zone = settings().STILLWELL_ZONE;
     const found = versionsOf(ctx, systemId);
-    const byPair = Map.groupBy(found, ({ version }) => keyOf(version.pointId, version.parameterId));
+    const byPair = new Map<string, LimitVersionRow[]>();
+    for (const each of found) {
+      const key = keyOf(each.version.pointId, each.version.parameterId);
+      byPair.set(key, [...(byPair.get(key) ?? []), toVersionRow(each)]);
+    }
     const pairs = new Map(
       [
         ...watched(ctx, systemId),
@@ -104,7 +108,7 @@ export const listLimitBoard = defineQuery({
       ].map((pair) => [keyOf(pair.place.pointId, pair.parameterId), pair]),
     );
     return [...pairs].map(([key, { parameterId, place }]) => {
-      const versions = (byPair.get(key) ?? []).map(toVersionRow);
+      const versions = byPair.get(key) ?? [];
       const [newest] = systemId ? recentReadings(ctx.db, place.pointId, parameterId, 1) : [];
       return {
         pointId: place.pointId,
