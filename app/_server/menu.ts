@@ -1,5 +1,10 @@
 import "server-only";
 import { type Actor, may, type Permission } from "@/modules/access";
+import { auditMay } from "@/modules/audit";
+import { measurementsMay } from "@/modules/measurements";
+import { qualityMay } from "@/modules/quality";
+import { roundsMay } from "@/modules/rounds";
+import { systemsMay } from "@/modules/systems";
 
 export type MenuEntry = {
   href: string;
@@ -15,6 +20,29 @@ export type MenuEntry = {
  * An entry stands here once its page works (tests/architecture/menu.test.ts sees to it).
  */
 export const MENU: readonly MenuEntry[] = [
+  {
+    href: "/today",
+    label: "Today",
+    for: [measurementsMay.read],
+  },
+  {
+    href: "/rounds",
+    label: "Rounds",
+    for: [roundsMay.read],
+  },
+  { href: "/systems", label: "Systems", for: [systemsMay.read] },
+  { href: "/charts", label: "Charts", for: [measurementsMay.read] },
+  {
+    href: "/incidents",
+    label: "Incidents",
+    for: [qualityMay.read],
+  },
+  {
+    href: "/review",
+    label: "Review",
+    for: [roundsMay.read],
+  },
+  { href: "/history", label: "History", for: [auditMay.readHistory] },
   {
     href: "/setup",
     label: "Setup",

@@ -18,6 +18,7 @@ export { setOperatingLevel } from "./commands/set-operating-level";
 export { systemsEvents } from "./events";
 export { getSystem } from "./queries/get-system";
 export { listAreas, listSites } from "./queries/list-areas";
+export { listOperatingVolumes } from "./queries/list-operating-volumes";
 export { listEquipment, listPoints } from "./queries/list-points";
 export { listSystems } from "./queries/list-systems";
 export { listWaitingVolumes, type WaitingVolume } from "./queries/list-waiting-volumes";

@@ -95,7 +95,7 @@ function toRow(
 }
 
 /** What one system holds at a moment, or why that cannot be told. */
-function operatingOf(
+export function operatingOf(
   db: Orm,
   systemId: number,
   at: number,
