@@ -63,3 +63,18 @@ export const listIncidentsInput = z.strictObject({
 
 export const incidentKey = z.strictObject({ incidentId: id });
 export const troubleKey = z.strictObject({ pointId: id, parameterId: id });
+
+/** A recheck is asked for within a number of hours. */
+const recheckHours = z.coerce.number({ error: "Say in how many hours." }).int().min(1).max(336);
+
+/** What the form of a new incident asks; where it is about follows from the reading or is chosen. */
+export const newIncidentForm = z.strictObject({
+  title,
+  note: z.string().trim().max(2000, "Keep the note under 2,000 characters."),
+  recheckHours: z.union([z.literal("").transform(() => null), recheckHours]),
+});
+export const incidentByHandForm = newIncidentForm.extend({
+  systemId: z.coerce.number({ error: "Choose a system." }).int().positive("Choose a system."),
+});
+export const noteForm = z.strictObject({ text: noteText });
+export const closureForm = closeIncidentInput.omit({ incidentId: true });
