@@ -38,3 +38,4 @@ export { chainHead } from "./seal";
 export { upkeep } from "./upkeep";
 export { type Finding, type Verification, verifyHistory } from "./verify";
 export { verifyCopyTask } from "./verify-copy";
+export { getHealth, type Health } from "./queries/get-health";
