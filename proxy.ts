@@ -1,4 +1,4 @@
-import { randomBytes } from "node:crypto";
+import { randomBytes, randomUUID } from "node:crypto";
 import { type NextRequest, NextResponse } from "next/server";
 import { settings } from "@/lib/env";
 
@@ -36,10 +36,13 @@ export function proxy(request: NextRequest): NextResponse {
   const headers = new Headers(request.headers);
   headers.set("x-nonce", nonce);
   headers.set("x-page", request.nextUrl.pathname);
+  const requestId = randomUUID();
+  headers.set("x-request-id", requestId);
   // Next reads the nonce for its own scripts from here.
   headers.set("content-security-policy", policy);
   const response = NextResponse.next({ request: { headers } });
   response.headers.set("content-security-policy", policy);
+  response.headers.set("x-request-id", requestId);
   if (secureCookies) response.headers.set("strict-transport-security", `max-age=${ONE_YEAR_S}`);
   return response;
 }

@@ -6,7 +6,7 @@ import { systemClock } from "@/lib/clock";
 import { log } from "@/lib/log";
 import { Problem } from "@/lib/problem";
 import { type Actor, SYSTEM_ACTOR } from "@/modules/access";
-import { ask, type Command, type Query, runCommand } from "@/modules/audit";
+import { ask, type Command, mustBeAllowed, parseInput, type Query, runCommand } from "@/modules/audit";
 import { confirmPassword } from "@/modules/identity";
 import { mustComeFromHere, readBody } from "./request";
 import { prepareRuntime } from "./runtime";
@@ -77,15 +77,28 @@ export function route(
   };
 }
 
-/** A route that carries out one command: JSON in, JSON out. Path parameters are merged into the input. */
+/** Whether a signature's password is the actor's; asked last, so that only a signature that could be made costs a try. */
+async function isOwnPassword<S extends z.ZodType>(
+  actor: Actor,
+  what: Command<S>,
+  input: unknown,
+  password: unknown,
+): Promise<boolean> {
+  if (typeof password !== "string" || actor.personId === null) return false;
+  parseInput(what.input, input);
+  return confirmPassword(database(), systemClock, actor.personId, password);
+}
+
+/**
+ * A route that carries out one command: JSON in, JSON out. Path parameters are merged into the input. Whoever may not do it
+ * at all is refused before the body is read.
+ */
 export function command<S extends z.ZodType, R>(what: Command<S, R>): RouteHandler {
   return route(async ({ request, actor, params, requestId }) => {
+    mustBeAllowed(actor, what.permission);
     const { password, ...sent } = await readBody(request);
-    const passwordConfirmed =
-      what.signed && typeof password === "string" && actor.personId !== null
-        ? await confirmPassword(database(), systemClock, actor.personId, password)
-        : false;
     const input = { ...sent, ...(what.signed || password === undefined ? {} : { password }), ...params };
+    const passwordConfirmed = what.signed ? await isOwnPassword(actor, what, input, password) : false;
     const answer = runCommand(database(), actor, what, input as z.input<S>, {
       clock: systemClock,
       requestId,

@@ -59,23 +59,34 @@ async function signInAddress(cause: Problem): Promise<string> {
   return search.size > 0 ? `/sign-in?${search}` : "/sign-in";
 }
 
+/** Every page that is refused leaves a line, by the id that its answer carries (set by proxy.ts, which decides nothing). */
+async function noteRefusal(why: Record<string, unknown>): Promise<void> {
+  const asked = await headers();
+  log().info({ requestId: asked.get("x-request-id"), path: asked.get("x-page"), ...why }, "page refused");
+}
+
 /** The actor of a page, once a request; people who are not signed in are sent to the sign-in page. */
 export const pageActor = cache(async (): Promise<Actor> => {
   prepareRuntime();
   try {
     return await requestActor();
   } catch (cause) {
-    if (cause instanceof Problem && cause.status === 401) redirect(await signInAddress(cause));
-    throw cause;
+    if (!(cause instanceof Problem && cause.status === 401)) throw cause;
+    await noteRefusal({ person: null, code: cause.code });
+    redirect(await signInAddress(cause));
   }
 });
+
+/** Shows the page that says that this is not for the actor. */
+export async function refusePage(actor: Actor, permission: Permission): Promise<never> {
+  await noteRefusal({ person: actor.personId, permission: permission.code, code: "not-allowed" });
+  forbidden();
+}
 
 /** A page that needs a permission before it asks anything (a form); shows the page that says so where there is none. */
 export async function mustMay(permission: Permission): Promise<Actor> {
   const actor = await pageActor();
-  if (may(actor, permission)) return actor;
-  log().info({ person: actor.personId, permission: permission.code }, "page refused");
-  forbidden();
+  return may(actor, permission) ? actor : refusePage(actor, permission);
 }
 
 /** Asks a question for a page: not allowed shows the page that says so, not found the one that says that. */
@@ -85,7 +96,7 @@ export async function askPage<S extends z.ZodType, R>(what: Query<S, R>, input: 
     return ask({ db: database().reader.orm, actor, at: systemClock.now() }, what, input);
   } catch (cause) {
     if (!(cause instanceof Problem)) throw cause;
-    log().info({ person: actor.personId, query: what.name, code: cause.code }, "page refused");
+    await noteRefusal({ person: actor.personId, query: what.name, code: cause.code });
     if (cause.status === 403) forbidden();
     if (cause.status === 404 || cause.status === 422) notFound();
     throw cause;

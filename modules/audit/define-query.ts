@@ -1,9 +1,9 @@
 import { type SQL, type SQLWrapper, sql } from "drizzle-orm";
 import type { z } from "zod";
 import type { Orm } from "@/db/database";
-import { Problem } from "@/lib/problem";
-import { may, visibleAreas } from "@/modules/access";
 import type { Actor, Permission } from "@/modules/access";
+import { visibleAreas } from "@/modules/access";
+import { mustBeAllowed } from "./must-be-allowed";
 import { parseInput } from "./parse-input";
 
 /** What a query's `run` is given. */
@@ -38,9 +38,7 @@ export function ask<S extends z.ZodType, R>(
   query: Query<S, R>,
   rawInput: z.input<S>,
 ): R {
-  if (!may(from.actor, query.permission)) {
-    throw new Problem("not-allowed", `Your role does not allow you to ${query.permission.says}.`);
-  }
+  mustBeAllowed(from.actor, query.permission);
   const areaIds = visibleAreas(from.actor, query.permission);
   const ctx: QueryContext = {
     ...from,

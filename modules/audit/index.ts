@@ -13,6 +13,7 @@ export { auditEvents } from "./events";
 export { insertJob, type Reaction, type ReactionTable, useReactions } from "./jobs/queue";
 export { defineTask, JobRunner, type Task, type WorkTable } from "./jobs/runner";
 export { migrateDatabase, sealOutsideCommand } from "./migrate";
+export { mustBeAllowed } from "./must-be-allowed";
 export { parseInput } from "./parse-input";
 export { type EntryWithChanges, getEntry } from "./queries/get-entry";
 export {
@@ -27,11 +28,11 @@ export {
   filterCondition,
   type HistoryFilter,
   historyFilter,
-  type ListedEntry,
   listEntries,
   listSubjectTypes,
   listVerbs,
 } from "./queries/list-entries";
+export { nameRecords } from "./queries/name-records";
 export { type RecordGate, type RecordGates, useRecordGates } from "./record-gates";
 export { type Answer, type RunOptions, runCommand } from "./run-command";
 export { chainHead } from "./seal";

@@ -5,11 +5,12 @@ import { assertDurable, type Database, type Sqlite } from "@/db/database";
 import type { Clock } from "@/lib/clock";
 import { invariant } from "@/lib/invariant";
 import { Problem } from "@/lib/problem";
-import { may, mayInArea } from "@/modules/access";
 import type { Actor } from "@/modules/access";
+import { mayInArea } from "@/modules/access";
 import type { Command, CommandContext } from "./define-command";
 import { insertJob, jobsFor } from "./jobs/queue";
 import type { HistoryEvent } from "./model";
+import { mustBeAllowed } from "./must-be-allowed";
 import { parseInput } from "./parse-input";
 import { chainHead, sealEntry } from "./seal";
 
@@ -24,24 +25,35 @@ export type RunOptions = {
 
 export type Answer<R> = { result: R; entryId: number; replayed: boolean };
 
-type Kept = { actor_id: number | null; command: string; input_hash: string; answer: string; entry_id: number };
-
-function mustBeAllowed(actor: Actor, command: Command): void {
-  if (may(actor, command.permission)) return;
-  throw new Problem("not-allowed", `Your role does not allow you to ${command.permission.says}.`);
-}
+type Kept = {
+  actor_id: number | null;
+  command: string;
+  input_hash: string;
+  answer: string;
+  entry_id: number;
+};
 
 function mustBeInOwnAreas(actor: Actor, command: Command, areas: Iterable<number>): void {
   for (const areaId of areas) {
     if (mayInArea(actor, command.permission, areaId)) continue;
-    throw new Problem("not-allowed", `You may ${command.permission.says} only in the areas you are assigned to.`);
+    throw new Problem(
+      "not-allowed",
+      `You may ${command.permission.says} only in the areas you are assigned to.`,
+    );
   }
 }
 
-function keptAnswer<R>(sqlite: Sqlite, key: string, actor: Actor, command: Command, inputHash: string): Answer<R> | null {
+function keptAnswer<R>(
+  sqlite: Sqlite,
+  key: string,
+  actor: Actor,
+  command: Command,
+  inputHash: string,
+): Answer<R> | null {
   const kept = sqlite.prepare("select * from audit_idempotency where key = ?").get(key) as Kept | undefined;
   if (!kept) return null;
-  const isSame = kept.actor_id === actor.personId && kept.command === command.verb && kept.input_hash === inputHash;
+  const isSame =
+    kept.actor_id === actor.personId && kept.command === command.verb && kept.input_hash === inputHash;
   if (!isSame) {
     throw new Problem("key-reused", "This idempotency key has been used for something else; send a new one.");
   }
@@ -49,7 +61,9 @@ function keptAnswer<R>(sqlite: Sqlite, key: string, actor: Actor, command: Comma
 }
 
 const inputHashOf = (input: unknown): string =>
-  createHash("sha256").update(canonicalize(input) ?? "null").digest("hex");
+  createHash("sha256")
+    .update(canonicalize(input) ?? "null")
+    .digest("hex");
 
 function seal(db: Database, actor: Actor, event: HistoryEvent, at: number, requestId: string | null): void {
   const { sqlite, openEntry } = db.writer;
@@ -85,8 +99,8 @@ export function runCommand<S extends z.ZodType, R>(
   rawInput: z.input<S>,
   options: RunOptions,
 ): Answer<R> {
+  mustBeAllowed(actor, command.permission);
   const input = parseInput(command.input, rawInput);
-  mustBeAllowed(actor, command as unknown as Command);
   if (command.signed && !options.passwordConfirmed) {
     throw new Problem("wrong-password", "Signing asks for your password; it is not right.");
   }
@@ -120,7 +134,13 @@ function carryOut<S extends z.ZodType, R>(
   const { sqlite, orm } = db.writer;
   const inputHash = options.idempotencyKey ? inputHashOf(rawInput) : "";
   if (options.idempotencyKey) {
-    const kept = keptAnswer<R>(sqlite, options.idempotencyKey, actor, command as unknown as Command, inputHash);
+    const kept = keptAnswer<R>(
+      sqlite,
+      options.idempotencyKey,
+      actor,
+      command as unknown as Command,
+      inputHash,
+    );
     if (kept) return kept;
   }
   const at = options.clock.now();
@@ -140,8 +160,18 @@ function carryOut<S extends z.ZodType, R>(
   seal(db, actor, event, at, ctx.requestId);
   if (options.idempotencyKey) {
     sqlite
-      .prepare("insert into audit_idempotency (key, actor_id, command, input_hash, answer, entry_id, at) values (?, ?, ?, ?, ?, ?, ?)")
-      .run(options.idempotencyKey, actor.personId, command.verb, inputHash, JSON.stringify(result ?? null), entryId, at);
+      .prepare(
+        "insert into audit_idempotency (key, actor_id, command, input_hash, answer, entry_id, at) values (?, ?, ?, ?, ?, ?, ?)",
+      )
+      .run(
+        options.idempotencyKey,
+        actor.personId,
+        command.verb,
+        inputHash,
+        JSON.stringify(result ?? null),
+        entryId,
+        at,
+      );
   }
   return { result, entryId, replayed: false };
 }

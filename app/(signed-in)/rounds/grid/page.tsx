@@ -1,6 +1,5 @@
 import type { Metadata } from "next";
-import { forbidden } from "next/navigation";
-import { askPage, pageActor } from "@/app/_server/session";
+import { askPage, pageActor, refusePage } from "@/app/_server/session";
 import { settings } from "@/lib/env";
 import { EmptyState, PageHead } from "@/lib/ui";
 import { mayInArea } from "@/modules/access";
@@ -21,7 +20,7 @@ export default async function DeskGridPage({ searchParams }: Props) {
   const actor = await pageActor();
   const seen = await askPage(listAreas, {});
   const areas = seen.filter((area) => mayInArea(actor, measurementsMay.record, area.id));
-  if (actor.personId === null || areas.length === 0) forbidden();
+  if (actor.personId === null || areas.length === 0) return refusePage(actor, measurementsMay.record);
   const asked = String((await searchParams).areas ?? "")
     .split(",")
     .map(Number);

@@ -1,7 +1,6 @@
 import type { Metadata } from "next";
 import Link from "next/link";
-import { forbidden } from "next/navigation";
-import { askPage, pageActor } from "@/app/_server/session";
+import { askPage, pageActor, refusePage } from "@/app/_server/session";
 import { systemClock } from "@/lib/clock";
 import { settings } from "@/lib/env";
 import { numberText } from "@/lib/ui";
@@ -23,7 +22,9 @@ export async function generateMetadata({ params }: Props): Promise<Metadata> {
 export default async function EntryPage({ params }: Props) {
   const actor = await pageActor();
   const system = await askPage(getSystem, await params);
-  if (actor.personId === null || !mayInArea(actor, measurementsMay.record, system.areaId)) forbidden();
+  if (actor.personId === null || !mayInArea(actor, measurementsMay.record, system.areaId)) {
+    return refusePage(actor, measurementsMay.record);
+  }
   const rows = await askPage(listWatch, { systemId: system.id, recent: 20 });
   const people = await askPage(listPersonNames, {});
   const account = await askPage(getOwnAccount, {});
