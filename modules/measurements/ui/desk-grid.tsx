@@ -1,7 +1,8 @@
 "use client";
-import { useEffect, useMemo, useRef, useState, useSyncExternalStore } from "react";
+import dynamic from "next/dynamic";
+import { useCallback, useEffect, useMemo, useRef, useState, useSyncExternalStore } from "react";
 import { systemClock } from "@/lib/clock";
-import { KeyHint, useCspNonce, useLiveMessage } from "@/lib/ui";
+import { KeyHint, Skeleton, useLiveMessage } from "@/lib/ui";
 import type { WatchRow } from "../model";
 import { GridCellLine } from "./grid-cell-line";
 import { GridDesk } from "./grid-desk";
@@ -11,6 +12,12 @@ import type { GridTable } from "./grid-table";
 import { SendState } from "./send-state";
 import { type PersonName, TakenFields, useTaken } from "./taken-fields";
 import { useOutbox } from "./use-outbox";
+
+/** The grid is heavy: it is fetched when a sheet is opened, not with every page. */
+const GridSheet = dynamic(() => import("./grid-sheet").then((module) => module.GridSheet), {
+  ssr: false,
+  loading: () => <Skeleton lines={8} label="The sheet is being laid out" />,
+});
 
 export interface DeskGridProps {
   rows: readonly WatchRow[];
@@ -31,33 +38,15 @@ export function DeskGrid({ rows, people, personId, zone }: DeskGridProps) {
   useEffect(() => outbox.subscribe(desk.touch), [outbox, desk]);
   useEffect(() => desk.setTaken(taken.taken), [desk, taken.taken?.at, taken.taken?.by, taken.taken === null]);
 
-  const nonce = useCspNonce();
-  const say = useLiveMessage();
-  const place = useRef<HTMLDivElement>(null);
+  const tell = useLiveMessage();
+  const say = useCallback((text: string) => tell({ text }), [tell]);
   const table = useRef<GridTable | null>(null);
+  const setTable = useCallback((next: GridTable | null) => {
+    table.current = next;
+  }, []);
   const heading = useRef<HTMLHeadingElement>(null);
+  const leave = useCallback(() => heading.current?.focus(), []);
   const [cell, setCell] = useState<string | null>(null);
-
-  useEffect(() => {
-    let isGone = false;
-    const element = place.current;
-    // the grid is heavy: it is fetched when a sheet is opened, not with every page
-    void import("./grid-table").then(({ showGrid }) => {
-      if (isGone || !element) return;
-      table.current = showGrid(element, {
-        desk,
-        nonce,
-        onFocus: (at) => setCell(at && desk.keyAt(at.row, at.column)),
-        say: (text) => say({ text }),
-        onLeave: () => heading.current?.focus(),
-      });
-    });
-    return () => {
-      isGone = true;
-      table.current?.destroy();
-      table.current = null;
-    };
-  }, [desk, nonce, say]);
 
   const goTo = (key: string) => {
     const [pointId, parameterId] = key.split(":").map(Number);
@@ -76,7 +65,7 @@ export function DeskGrid({ rows, people, personId, zone }: DeskGridProps) {
       <div className="desk-layout">
         <div className="min-w-0">
           <GridCellLine desk={desk} cell={cell} />
-          <div ref={place} className="desk-grid" data-rows={rows.length > 0 ? desk.sheet.rows.length : 0} />
+          <GridSheet desk={desk} onCell={setCell} say={say} onLeave={leave} onTable={setTable} />
           <Hints />
         </div>
         <GridPanel

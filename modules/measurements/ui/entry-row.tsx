@@ -80,14 +80,14 @@ function SentBox({ entry: { item, row } }: { entry: EntryCell }) {
   const isText = row.parameter.kind === "text";
   const { typedText, typedUnit } = item.reading;
   return (
-    <output
+    <div
       className={`entry-box items-center !border-dashed ${isText ? "" : "justify-end"}`}
       data-size="large"
       data-status={statusOf(item) ?? undefined}
     >
       <span className={`px-2.5 ${isText ? "py-2" : "num text-[1.6875rem] leading-none"}`}>{typedText}</span>
       <span className="entry-unit">{unitLabel(typedUnit)}</span>
-    </output>
+    </div>
   );
 }
 

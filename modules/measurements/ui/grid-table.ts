@@ -9,6 +9,7 @@ import {
   type GridApi,
   ModuleRegistry,
   RenderApiModule,
+  RowApiModule,
   ScrollApiModule,
   type SuppressKeyboardEventParams,
   themeQuartz,
@@ -28,6 +29,7 @@ ModuleRegistry.registerModules([
   CellApiModule,
   ColumnApiModule,
   RenderApiModule,
+  RowApiModule,
   ScrollApiModule,
 ]);
 
