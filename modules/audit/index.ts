@@ -7,7 +7,13 @@ export { askForBackup } from "./commands/ask-for-backup";
 export { askForVerification } from "./commands/ask-for-verification";
 export { retryJob } from "./commands/retry-job";
 export { headOfFile, mergeWriteAheadLog, verifyFile } from "./database-files";
-export { type Command, type CommandContext, type CommandOutcome, defineCommand, type QueuedWork } from "./define-command";
+export {
+  type Command,
+  type CommandContext,
+  type CommandOutcome,
+  defineCommand,
+  type QueuedWork,
+} from "./define-command";
 export { ask, defineQuery, type Query, type QueryContext } from "./define-query";
 export { auditEvents } from "./events";
 export { insertJob, type Reaction, type ReactionTable, useReactions } from "./jobs/queue";
@@ -16,6 +22,7 @@ export { migrateDatabase, sealOutsideCommand } from "./migrate";
 export { mustBeAllowed } from "./must-be-allowed";
 export { parseInput } from "./parse-input";
 export { type EntryWithChanges, getEntry } from "./queries/get-entry";
+export { getHealth, type Health } from "./queries/get-health";
 export {
   getRecordAt,
   getRecordHistory,
@@ -32,6 +39,7 @@ export {
   listSubjectTypes,
   listVerbs,
 } from "./queries/list-entries";
+export { listTroubledJobs } from "./queries/list-troubled-jobs";
 export { nameRecords } from "./queries/name-records";
 export { type RecordGate, type RecordGates, useRecordGates } from "./record-gates";
 export { type Answer, type RunOptions, runCommand } from "./run-command";
@@ -39,4 +47,3 @@ export { chainHead } from "./seal";
 export { upkeep } from "./upkeep";
 export { type Finding, type Verification, verifyHistory } from "./verify";
 export { verifyCopyTask } from "./verify-copy";
-export { getHealth, type Health } from "./queries/get-health";

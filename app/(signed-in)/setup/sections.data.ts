@@ -1,4 +1,5 @@
 import type { Permission } from "@/modules/access";
+import { auditMay } from "@/modules/audit";
 import { identityMay } from "@/modules/identity";
 import { measurementsMay } from "@/modules/measurements";
 import { methodsMay } from "@/modules/methods";
@@ -96,6 +97,12 @@ export const SETUP: readonly SetupGroup[] = [
   {
     title: "This installation",
     sections: [
+      {
+        href: "/setup/health",
+        label: "Health and backup",
+        says: "Room on the disk, backups, work that failed, and the settings in force.",
+        for: [auditMay.readHealth],
+      },
       {
         href: "/setup/outbox",
         label: "Mail",

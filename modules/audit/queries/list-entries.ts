@@ -3,6 +3,7 @@ import { z } from "zod";
 import type { Orm } from "@/db/database";
 import { auditMay } from "../abilities";
 import { defineQuery } from "../define-query";
+import type { ListedEntry } from "../model";
 import { auditEntry } from "../schema";
 
 const id = z.coerce.number().int().positive();
@@ -68,7 +69,7 @@ export const listEntries = defineQuery({
     after: id.optional(),
     limit: z.coerce.number().int().min(1).max(1000).default(50),
   }),
-  run(ctx, { before, after, limit, ...filter }) {
+  run(ctx, { before, after, limit, ...filter }): { entries: ListedEntry[]; hasMore: boolean } {
     const upwards = after !== undefined;
     const order = upwards ? asc : desc;
     const rows = ctx.db
@@ -89,8 +90,6 @@ export const listEntries = defineQuery({
     return { entries, hasMore: rows.length > limit };
   },
 });
-
-export type ListedEntry = ReturnType<typeof listEntries.run>["entries"][number];
 
 /** Each value of an indexed column once, by hopping through its index from one value to the next. */
 function valuesOf(db: Orm, column: SQL): string[] {

@@ -1,0 +1,43 @@
+/** Kind of subject, as entries name it → the table whose record it is. Kinds that are no record are not here. */
+export const SUBJECT_TABLES: Readonly<Record<string, string>> = {
+  area: "systems_area",
+  delivery: "measurements_delivery",
+  equipment: "systems_equipment",
+  import: "imports_import",
+  incident: "quality_incident",
+  instrument: "methods_instrument",
+  "limit-template": "measurements_limit_template",
+  "limit-workbook": "measurements_limit_workbook",
+  method: "methods_method",
+  parameter: "methods_parameter",
+  person: "identity_person",
+  point: "systems_point",
+  reading: "measurements_reading",
+  site: "systems_site",
+  system: "systems_system",
+  verification: "audit_verification",
+  volume: "systems_volume_determination",
+};
+
+/** Column of any table → the table whose record its number names. People are shown by name and not here. */
+export const REFERENCE_TABLES: Readonly<Record<string, string>> = {
+  area_id: "systems_area",
+  delivery_id: "measurements_delivery",
+  file_id: "imports_file",
+  import_id: "imports_import",
+  incident_id: "quality_incident",
+  instrument_id: "methods_instrument",
+  limit_version_id: "measurements_limit_version",
+  method_id: "methods_method",
+  one_system_id: "systems_system",
+  other_system_id: "systems_system",
+  parameter_id: "methods_parameter",
+  point_id: "systems_point",
+  reading_id: "measurements_reading",
+  recheck_reading_id: "measurements_reading",
+  signature_id: "signoff_signature",
+  site_id: "systems_site",
+  supersedes_id: "measurements_reading",
+  system_id: "systems_system",
+  workbook_id: "measurements_limit_workbook",
+};
