@@ -10,7 +10,14 @@ import { importsMay } from "./abilities";
 import type { KnownParameter } from "./model";
 
 export type Place = typeof pointDirectory.$inferSelect;
-type SystemPlaces = { code: string; name: string; state: string; areaName: string; mayHere: boolean; points: Place[] };
+type SystemPlaces = {
+  code: string;
+  name: string;
+  state: string;
+  areaName: string;
+  mayHere: boolean;
+  points: Place[];
+};
 type Named = { id: number; code: string };
 
 /** Everything a file may name, by the words by which it may name it. */

@@ -1,7 +1,14 @@
 import "server-only";
 
 export { importsMay } from "./abilities";
-export { answerQuestions, discardImport, failImport, recordCheck, recordSurvey, startCheck } from "./commands/check-import";
+export {
+  answerQuestions,
+  discardImport,
+  failImport,
+  recordCheck,
+  recordSurvey,
+  startCheck,
+} from "./commands/check-import";
 export { finishCommit, startCommit, withdrawImport } from "./commands/commit-import";
 export { registerUpload } from "./commands/register-upload";
 export { importsEvents } from "./events";

@@ -12,7 +12,10 @@ export const fileNameInput = z
   .trim()
   .min(1, "Say the file's name.")
   .max(200, "The file's name is longer than 200 characters. Shorten it.")
-  .refine((name) => !/[/\\\u0000-\u001f]/.test(name), "A file's name has no slashes and no control characters.");
+  .refine(
+    (name) => !/[/\\\u0000-\u001f]/.test(name),
+    "A file's name has no slashes and no control characters.",
+  );
 
 /** What a person says about the whole file; what is left out stays as it was. */
 export const answerQuestionsInput = z.strictObject({

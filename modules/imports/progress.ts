@@ -73,4 +73,3 @@ export async function resumeCheck(
   upkeep(db, (orm) => saveProgress(orm, progress));
   return progress;
 }
-

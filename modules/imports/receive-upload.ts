@@ -34,7 +34,10 @@ export type UploadDeps = {
   reader?: ReaderOptions;
 };
 
-const CODES: Partial<Record<FileRefusalCode, ProblemCode>> = { "too-large": "too-large", "wrong-type": "wrong-type" };
+const CODES: Partial<Record<FileRefusalCode, ProblemCode>> = {
+  "too-large": "too-large",
+  "wrong-type": "wrong-type",
+};
 
 /** A file that cannot be read, as a refusal that leaves the server. */
 export function refusedFileProblem({ refusal }: RefusedFile): Problem {
@@ -58,7 +61,9 @@ async function receive({ body, declaredBytes }: Upload): Promise<ReceivedObject>
     return await diskStore(settings().dataFolder).receive(from, maxBytes);
   } catch (cause) {
     if (cause instanceof TooLarge) throw tooLarge(maxBytes);
-    throw new Problem("invalid", "The file did not arrive whole. Check the network and send it again.", [], { cause });
+    throw new Problem("invalid", "The file did not arrive whole. Check the network and send it again.", [], {
+      cause,
+    });
   }
 }
 
@@ -110,7 +115,8 @@ export async function receiveUpload(
     if (idempotencyKey === null) mustBeNew(db.reader.orm, received.sha256);
     const header = await inspect(db, name, received, reader);
     await received.keep(storageKey(received.sha256));
-    return runCommand(db, actor, registerUpload, { name, header }, { clock, requestId, idempotencyKey }).result;
+    return runCommand(db, actor, registerUpload, { name, header }, { clock, requestId, idempotencyKey })
+      .result;
   } finally {
     await received.discard();
   }

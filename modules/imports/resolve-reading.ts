@@ -23,7 +23,13 @@ export type ResolveContext = {
   at: number;
 };
 
-type Fault = { field: ImportField; code: ResolveProblemCode; reason: string; mend: string; text: string | null };
+type Fault = {
+  field: ImportField;
+  code: ResolveProblemCode;
+  reason: string;
+  mend: string;
+  text: string | null;
+};
 const LONGEST = { note: 1000, value: 2000, unit: 40 } as const;
 
 /** Looks up what a reading of a file names. All problems at once, each with its column, the reason and how to mend it. */
@@ -40,7 +46,10 @@ export function resolveReading(candidate: CandidateReading, context: ResolveCont
   const typed = { typedText: candidate.valueText, plainText, typedUnit: candidate.unit };
   const value = parameter && readValue(parameter, typed, faults);
   if (faults.length > 0 || !place || !parameter || !value) {
-    return { kind: "refused", problems: faults.map((fault) => withColumn(fault, candidate, context.columns)) };
+    return {
+      kind: "refused",
+      problems: faults.map((fault) => withColumn(fault, candidate, context.columns)),
+    };
   }
   const where = { pointId: place.pointId, parameterId: parameter.id, takenAt: candidate.takenAt };
   const reading = { ...where, ...typed, takenBy, methodId, instrumentId, note: candidate.note };
@@ -69,7 +78,9 @@ function findPlace(candidate: CandidateReading, { systems }: Directory, faults: 
   };
   if (!system || found.length > 1) {
     const example = systems.all[0]?.code ?? "KELP-01";
-    const reason = system ? `“${name}” is the name of ${found.length} systems.` : `There is no system “${name}”.`;
+    const reason = system
+      ? `“${name}” is the name of ${found.length} systems.`
+      : `There is no system “${name}”.`;
     return fault("unknown-system", reason, `Write the system's code, such as ${example}.`);
   }
   if (!system.mayHere) {
@@ -161,21 +172,30 @@ function findInstrument(
     field: "instrument",
     code: "unknown-instrument",
     reason:
-      found.length > 1 ? `“${name}” stands for ${found.length} instruments.` : `There is no instrument “${name}”.`,
+      found.length > 1
+        ? `“${name}” stands for ${found.length} instruments.`
+        : `There is no instrument “${name}”.`,
     mend: "Write the instrument's code or serial number as it stands under Setup, or leave the cell empty.",
     text: name,
   });
   return null;
 }
 
-function findPerson({ takenBy: name }: CandidateReading, { people }: Directory, faults: Fault[]): number | null {
+function findPerson(
+  { takenBy: name }: CandidateReading,
+  { people }: Directory,
+  faults: Fault[],
+): number | null {
   if (name === null) return null;
   const found = people.find(name);
   if (found[0] && found.length === 1) return found[0].id;
   faults.push({
     field: "takenBy",
     code: "unknown-person",
-    reason: found.length > 1 ? `${found.length} people are called “${name}”.` : `There is nobody here called “${name}”.`,
+    reason:
+      found.length > 1
+        ? `${found.length} people are called “${name}”.`
+        : `There is nobody here called “${name}”.`,
     mend: "Write the full name of somebody who works here, or leave the cell empty: then it is you.",
     text: name,
   });

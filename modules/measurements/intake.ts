@@ -1,4 +1,3 @@
-import { eq } from "drizzle-orm";
 import type { Orm } from "@/db/database";
 import { MINUTE_MS } from "@/lib/clock";
 import { invalidField, Problem } from "@/lib/problem";
@@ -10,7 +9,8 @@ import { IntakeCache } from "./intake-cache";
 import { judgeAndStore, judgeDependents } from "./judge";
 import type { JudgementCause, ReadingSource, ReadingValue, StatusVerdict } from "./model";
 import { parseValue } from "./rules/parse-value";
-import { reading } from "./schema";
+import type { reading } from "./schema";
+import { askingStatements, writingStatements } from "./statements";
 
 /** Clocks of tablets run a little ahead; more than this lies in the future. */
 export const CLOCK_SLACK_MS = 5 * MINUTE_MS;
@@ -48,7 +48,11 @@ export function readTypedValue(
 
 function mustNotLieAhead(takenAt: number, at: number, pointer: string): void {
   if (takenAt <= at + CLOCK_SLACK_MS) return;
-  throw invalidField(`${pointer}/takenAt`, "future", "The time lies in the future. Say when the reading was taken.");
+  throw invalidField(
+    `${pointer}/takenAt`,
+    "future",
+    "The time lies in the future. Say when the reading was taken.",
+  );
 }
 
 function whoTook(
@@ -79,7 +83,7 @@ export type Intake = {
 export type Taken = { row: ReadingRow; verdict: StatusVerdict | null; isRepeat: boolean };
 
 function repeated(intake: Intake, input: DeliveredReading, pointer: string): Taken | null {
-  const known = intake.db.select().from(reading).where(eq(reading.uuid, input.uuid)).get();
+  const known = askingStatements(intake.db).byUuid.get({ uuid: input.uuid });
   if (!known) return null;
   const isSame =
     known.enteredBy === intake.enteredBy &&
@@ -87,7 +91,12 @@ function repeated(intake: Intake, input: DeliveredReading, pointer: string): Tak
     known.parameterId === input.parameterId &&
     known.typedText === input.typedText &&
     known.takenAt === input.takenAt;
-  if (!isSame) throw invalidField(`${pointer}/uuid`, "uuid-reused", "This UUID belongs to another reading; make a new one.");
+  if (!isSame)
+    throw invalidField(
+      `${pointer}/uuid`,
+      "uuid-reused",
+      "This UUID belongs to another reading; make a new one.",
+    );
   return { row: known, verdict: null, isRepeat: true };
 }
 
@@ -101,35 +110,33 @@ export function takeReading(intake: Intake, input: DeliveredReading, pointer = "
   const repeat = repeated(intake, input, pointer);
   if (repeat) return repeat;
   const place = cache.place(input.pointId);
-  if (place.systemState === "retired") throw new Problem("conflict", `${place.systemCode} is retired; nothing is read there.`);
+  if (place.systemState === "retired")
+    throw new Problem("conflict", `${place.systemCode} is retired; nothing is read there.`);
   const parameter = cache.parameter(input.parameterId);
-  if (parameter.isRetired) throw invalidField(`${pointer}/parameterId`, "retired", `${parameter.name} is not measured any more.`);
+  if (parameter.isRetired)
+    throw invalidField(`${pointer}/parameterId`, "retired", `${parameter.name} is not measured any more.`);
   mustNotLieAhead(input.takenAt, at, pointer);
   const typed = readTypedValue(parameter, input, pointer);
-  const row = db
-    .insert(reading)
-    .values({
-      uuid: input.uuid,
-      pointId: input.pointId,
-      parameterId: input.parameterId,
-      typedText: input.typedText,
-      typedUnit: input.typedUnit ?? parameter.unit,
-      ...typed,
-      takenAt: input.takenAt,
-      enteredAt: at,
-      takenBy: whoTook(cache, input.takenBy, enteredBy, pointer),
-      enteredBy,
-      methodId: input.methodId ?? null,
-      instrumentId: input.instrumentId ?? null,
-      source: intake.source,
-      sourceRef: intake.sourceRef ?? null,
-      deliveryId: intake.deliveryId ?? null,
-      note: input.note ?? null,
-      confirmedBy: input.confirmed ? enteredBy : null,
-      confirmedAt: input.confirmed ? at : null,
-    })
-    .returning()
-    .get();
+  const row = writingStatements(db).store.get({
+    uuid: input.uuid,
+    pointId: input.pointId,
+    parameterId: input.parameterId,
+    typedText: input.typedText,
+    typedUnit: input.typedUnit ?? parameter.unit,
+    ...typed,
+    takenAt: input.takenAt,
+    enteredAt: at,
+    takenBy: whoTook(cache, input.takenBy, enteredBy, pointer),
+    enteredBy,
+    methodId: input.methodId ?? null,
+    instrumentId: input.instrumentId ?? null,
+    source: intake.source,
+    sourceRef: intake.sourceRef ?? null,
+    deliveryId: intake.deliveryId ?? null,
+    note: input.note ?? null,
+    confirmedBy: input.confirmed ? enteredBy : null,
+    confirmedAt: input.confirmed ? at : null,
+  });
   const versions = cache.versions(row.pointId, row.parameterId);
   const verdict = judgeAndStore(db, row, at, "entered", { parameter, versions, isFirst: true });
   if (row.deliveryId === null) judgeDependents(db, row, at, "late-reading");

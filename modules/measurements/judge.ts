@@ -1,17 +1,24 @@
-import { and, asc, desc, eq, gte, lte, ne, sql } from "drizzle-orm";
+import { and, asc, eq, gte, lte, ne } from "drizzle-orm";
 import type { Orm } from "@/db/database";
+import { settings } from "@/lib/env";
 import { invariant } from "@/lib/invariant";
 import { unitLabel } from "@/lib/units/factors";
-import type { FacilityParameter } from "@/modules/methods/model";
 import { getParameter } from "@/modules/methods";
+import type { FacilityParameter } from "@/modules/methods/model";
 import { approvedVersions } from "./limits";
-import { limitsAt } from "./rules/limits-at";
-import { settings } from "@/lib/env";
 import type { JudgementCause, LimitVersion, ReadingValue, StatusVerdict } from "./model";
 import { STATUS_RULE_VERSION } from "./model";
-import { CHANGE_WINDOW_MS, type Change24h, dependentWindow, greatestChange24h, type TimedValue } from "./rules/change-24h";
+import {
+  CHANGE_WINDOW_MS,
+  type Change24h,
+  dependentWindow,
+  greatestChange24h,
+  type TimedValue,
+} from "./rules/change-24h";
+import { limitsAt } from "./rules/limits-at";
 import { judgeReading } from "./rules/status";
-import { judgement, readingInForce } from "./schema";
+import { readingInForce } from "./schema";
+import { askingStatements, writingStatements } from "./statements";
 
 /** What of a stored reading a judgement rests on. */
 export type Judged = {
@@ -31,17 +38,8 @@ export type Judged = {
  */
 export function precedingValues(db: Orm, of: Judged): TimedValue[] {
   const { id, pointId, parameterId, takenAt, deliveryId } = of;
-  return db.all<TimedValue>(sql`
-    select r.id, r.taken_at as "takenAt", r.value, r.qualifier from measurements_reading r
-    left join measurements_delivery d on d.id = r.delivery_id
-    where r.point_id = ${pointId} and r.parameter_id = ${parameterId}
-      and r.taken_at between ${takenAt - CHANGE_WINDOW_MS} and ${takenAt} and r.id <> ${id} and r.voided_at is null
-      and (r.delivery_id is null or r.delivery_id is ${deliveryId}
-        or (d.published_at is not null and d.withdrawn_at is null))
-      and not exists (select 1 from measurements_reading later where later.supersedes_id = r.id)
-      and coalesce((select j.status from measurements_judgement j where j.reading_id = r.id order by j.id desc limit 1), '')
-        <> 'implausible'
-    order by r.taken_at`);
+  const window = { fromAt: takenAt - CHANGE_WINDOW_MS, toAt: takenAt };
+  return askingStatements(db).preceding.all({ id, pointId, parameterId, deliveryId, ...window });
 }
 
 /**
@@ -74,18 +72,6 @@ export function verdictOn(
   return { verdict, limitVersionId: limits.state === "none" ? null : limits.versionId };
 }
 
-type Stored = { status: string; sentence: string; limitVersionId: number | null };
-
-function latestJudgement(db: Orm, readingId: number): Stored | undefined {
-  return db
-    .select({ status: judgement.status, sentence: judgement.sentence, limitVersionId: judgement.limitVersionId })
-    .from(judgement)
-    .where(eq(judgement.readingId, readingId))
-    .orderBy(desc(judgement.id))
-    .limit(1)
-    .get();
-}
-
 type Known = {
   parameter?: FacilityParameter;
   versions?: readonly LimitVersion[];
@@ -107,26 +93,24 @@ export function judgeAndStore(
     isFirst = false,
   } = known;
   const { verdict, limitVersionId } = verdictOn(of, parameter, versions, () => precedingValues(db, of));
-  const before = isFirst ? undefined : latestJudgement(db, of.id);
+  const before = isFirst ? undefined : askingStatements(db).latestJudgement.get({ readingId: of.id });
   const isSame =
     before !== undefined &&
     before.status === verdict.status &&
     before.sentence === verdict.sentence &&
     before.limitVersionId === limitVersionId;
   if (!isSame) {
-    db.insert(judgement)
-      .values({
-        readingId: of.id,
-        status: verdict.status,
-        side: verdict.side,
-        sentence: verdict.sentence,
-        reasons: [...verdict.reasons],
-        limitVersionId,
-        ruleVersion: STATUS_RULE_VERSION,
-        cause,
-        judgedAt: at,
-      })
-      .run();
+    writingStatements(db).judge.run({
+      readingId: of.id,
+      status: verdict.status,
+      side: verdict.side,
+      sentence: verdict.sentence,
+      reasons: [...verdict.reasons],
+      limitVersionId,
+      ruleVersion: STATUS_RULE_VERSION,
+      cause,
+      judgedAt: at,
+    });
   }
   return verdict;
 }

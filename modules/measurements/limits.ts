@@ -1,9 +1,9 @@
-import { and, asc, eq } from "drizzle-orm";
 import type { Orm } from "@/db/database";
 import { settings } from "@/lib/env";
 import type { LimitsInForce, LimitVersion } from "./model";
 import { limitsAt } from "./rules/limits-at";
-import { limitVersion } from "./schema";
+import type { limitVersion } from "./schema";
+import { askingStatements } from "./statements";
 
 type Row = typeof limitVersion.$inferSelect;
 
@@ -18,19 +18,7 @@ const toVersion = (row: Row): LimitVersion => ({
 
 /** The approved versions of the limits of a point and parameter, oldest first. */
 export function approvedVersions(db: Orm, pointId: number, parameterId: number): LimitVersion[] {
-  return db
-    .select()
-    .from(limitVersion)
-    .where(
-      and(
-        eq(limitVersion.pointId, pointId),
-        eq(limitVersion.parameterId, parameterId),
-        eq(limitVersion.state, "approved"),
-      ),
-    )
-    .orderBy(asc(limitVersion.version))
-    .all()
-    .map(toVersion);
+  return askingStatements(db).versions.all({ pointId, parameterId }).map(toVersion);
 }
 
 /** The limits in force at a moment. */

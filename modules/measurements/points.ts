@@ -1,13 +1,14 @@
-import { eq, inArray } from "drizzle-orm";
+import { inArray } from "drizzle-orm";
 import type { Orm } from "@/db/database";
 import { notFound } from "@/lib/problem";
 import { pointDirectory } from "@/modules/systems";
+import { askingStatements } from "./statements";
 
 export type PointPlace = typeof pointDirectory.$inferSelect;
 
 /** Where a point is. @throws Problem `not-found` */
 export function getPoint(db: Orm, pointId: number): PointPlace {
-  const row = db.select().from(pointDirectory).where(eq(pointDirectory.pointId, pointId)).get();
+  const row = askingStatements(db).place.get({ pointId });
   if (!row) throw notFound("such point");
   return row;
 }

@@ -44,7 +44,11 @@ export const recordSurvey = defineCommand({
     change(ctx, row, { header, survey, form: header.columnMap.form, state, checkRun });
     return {
       result: { state },
-      event: { kind: importsEvents.surveyed, subject: subject(row), payload: { rows: survey.rows, asks: !isClear } },
+      event: {
+        kind: importsEvents.surveyed,
+        subject: subject(row),
+        payload: { rows: survey.rows, asks: !isClear },
+      },
     };
   },
 });
@@ -128,7 +132,11 @@ export const recordCheck = defineCommand({
     });
     return {
       result: { importId },
-      event: { kind: importsEvents.checked, subject: subject(row), payload: { accepted, duplicate, refused } },
+      event: {
+        kind: importsEvents.checked,
+        subject: subject(row),
+        payload: { accepted, duplicate, refused },
+      },
     };
   },
 });
@@ -146,7 +154,12 @@ export const failImport = defineCommand({
     change(ctx, row, { state: "failed", problem, deliveryId: null });
     return {
       result: { importId },
-      event: { kind: importsEvents.failed, subject: subject(row), payload: { was: row.state }, reason: problem },
+      event: {
+        kind: importsEvents.failed,
+        subject: subject(row),
+        payload: { was: row.state },
+        reason: problem,
+      },
     };
   },
 });

@@ -25,7 +25,9 @@ export const getImport = defineQuery({
   input: getImportInput,
   run(ctx, input): ImportDetail {
     const where =
-      "code" in input ? sql`lower(${imports.code}) = ${input.code.toLowerCase()}` : eq(imports.id, input.importId);
+      "code" in input
+        ? sql`lower(${imports.code}) = ${input.code.toLowerCase()}`
+        : eq(imports.id, input.importId);
     const row = ctx.db.select().from(imports).where(where).get();
     if (!row) throw notFound("such import");
     const file = getFileRecord(ctx.db, row.fileId);

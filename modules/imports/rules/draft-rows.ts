@@ -86,7 +86,8 @@ export class RowDrafter {
     if (problems.length === 0) return [];
     const isBroken = row.problem !== undefined || problems.some(({ code }) => SHAPE_CODES.has(code));
     if (isBroken) return [this.#draft(row, WHOLE_ROW, problems)];
-    if (this.#form === "long") return [this.#draft(row, this.#layout.values[0]?.index ?? WHOLE_ROW, problems)];
+    if (this.#form === "long")
+      return [this.#draft(row, this.#layout.values[0]?.index ?? WHOLE_ROW, problems)];
     const columns = this.#layout.values.map((column) => column.index);
     const shared = problems.filter(({ column }) => column === null || !columns.includes(column));
     const own = (index: number) => problems.filter(({ column }) => column === index);

@@ -10,10 +10,14 @@ describe("the pace of slices", () => {
     expect(pace.size).toBe(100);
   });
 
-  it("halves after a slice that was too long and never comes to nothing", () => {
-    const pace = new Pace(4, 500);
+  it("halves after a slice that was too long, down to its least", () => {
+    const pace = new Pace(20, 500);
+    pace.took(1, 20);
+    pace.took(1, 40);
+    pace.took(200, 80);
+    expect(pace.size).toBe(40);
     for (let index = 0; index < 10; index += 1) pace.took(200, pace.size);
-    expect(pace.size).toBe(1);
+    expect(pace.size).toBe(20);
   });
 
   it("does not grow by a slice that was not full", () => {

@@ -48,7 +48,18 @@ export function templateCsv(): string {
   const rows = [
     HEADER.slice(0, 10),
     ["KELP-01", "", "temperature", "12.4", "°C", "2026-03-02 09:00", "", "", "", ""],
-    ["KELP-01", "", "ammonia_n", "<0.01", "mg/L", "2026-03-02 09:00", "", "", "less than the least reported", ""],
+    [
+      "KELP-01",
+      "",
+      "ammonia_n",
+      "<0.01",
+      "mg/L",
+      "2026-03-02 09:00",
+      "",
+      "",
+      "less than the least reported",
+      "",
+    ],
   ];
   return CSV_BOM + rows.map((row) => csvLine(row)).join("");
 }

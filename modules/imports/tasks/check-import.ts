@@ -22,7 +22,7 @@ import { Staging } from "./staging";
 
 export type TaskDeps = { db: Database; clock: Clock };
 
-const FIRST_SLICE = 32;
+const LEAST_ROWS = 64;
 const MOST_ROWS = 500;
 
 /** A refusal as it is shown: what is wrong and how to mend it. */
@@ -65,7 +65,8 @@ async function survey({ db, clock }: TaskDeps, row: ImportRecord, options: Reade
 async function check(deps: TaskDeps, row: ImportRecord, options: ReaderOptions): Promise<void> {
   const { db, clock } = deps;
   const actor = actorOf(db.reader.orm, row.uploadedBy, clock.now());
-  if (!actor) return fail(deps, row, "Whoever uploaded the file may not import any more. Upload it yourself.");
+  if (!actor)
+    return fail(deps, row, "Whoever uploaded the file may not import any more. Upload it yourself.");
   let progress = await resumeCheck(db, row.id, row.checkRun, clock.now());
   const opened = await openReader(
     {
@@ -82,7 +83,7 @@ async function check(deps: TaskDeps, row: ImportRecord, options: ReaderOptions):
   const of = { importId: row.id, importCode: row.code, checkRun: row.checkRun, sha256 };
   const staging = new Staging(db, { ...of, columns: columnMap.columns, directory });
   const drafter = new RowDrafter(columnMap, serialEpoch);
-  const pace = new Pace(FIRST_SLICE, MOST_ROWS);
+  const pace = new Pace(LEAST_ROWS, MOST_ROWS);
   try {
     for await (const batch of opened.batches) {
       if (!stillStands(db, row)) return;

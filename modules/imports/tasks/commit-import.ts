@@ -19,8 +19,10 @@ import { stagedRow } from "../schema";
 import { COMMIT_IMPORT } from "../work";
 import type { TaskDeps } from "./check-import";
 
-const FIRST_SLICE = 16;
+const LEAST_ROWS = 32;
 const MOST_ROWS = 400;
+/** How often it is written down how far the commit is; what was brought in since is recognised by its UUIDs. */
+const NOTE_MS = 500;
 
 type Staged = typeof stagedRow.$inferSelect;
 
@@ -29,7 +31,9 @@ function nextRows(db: Orm, importId: number, afterId: number, limit: number): St
   return db
     .select()
     .from(stagedRow)
-    .where(and(eq(stagedRow.importId, importId), eq(stagedRow.outcome, "accepted"), gt(stagedRow.id, afterId)))
+    .where(
+      and(eq(stagedRow.importId, importId), eq(stagedRow.outcome, "accepted"), gt(stagedRow.id, afterId)),
+    )
     .orderBy(asc(stagedRow.id))
     .limit(limit)
     .all();
@@ -47,8 +51,7 @@ function deliveredBy({ readingUuid, candidate }: Staged) {
 }
 
 /** Counts a slice as brought in, and as duplicates what somebody else has brought in since the check. */
-function countSlice(
-  db: Database,
+function counted(
   progress: ProgressRecord,
   slice: readonly Staged[],
   known: readonly Staged[],
@@ -56,7 +59,7 @@ function countSlice(
 ): ProgressRecord {
   const statusCounts = { ...progress.statusCounts };
   for (const row of known) statusCounts[row.expectedStatus as keyof StatusCounts] -= 1;
-  const next = {
+  return {
     ...progress,
     committedId: slice.at(-1)?.id ?? progress.committedId,
     committed: progress.committed + slice.length - known.length,
@@ -65,6 +68,10 @@ function countSlice(
     statusCounts,
     updatedAt: at,
   };
+}
+
+/** Writes down how far the commit is. */
+function note(db: Database, progress: ProgressRecord, known: readonly Staged[]): void {
   upkeep(db, (orm) => {
     for (const row of known) {
       orm
@@ -73,9 +80,8 @@ function countSlice(
         .where(eq(stagedRow.id, row.id))
         .run();
     }
-    saveProgress(orm, next);
+    saveProgress(orm, progress);
   });
-  return next;
 }
 
 const SINCE_CHECK = {
@@ -94,7 +100,8 @@ async function bringIn(deps: TaskDeps, row: ImportRecord, actor: Actor, signal?:
   invariant(known, "an import that is being committed has been checked");
   let progress = known;
   const findEqual = equalFinder(db.reader.orm);
-  const pace = new Pace(FIRST_SLICE, MOST_ROWS);
+  const pace = new Pace(LEAST_ROWS, MOST_ROWS);
+  let notedAt = performance.now();
   const run = { clock, requestId: `import:${row.code}` };
   for (;;) {
     if (signal?.aborted) throw signal.reason;
@@ -103,12 +110,18 @@ async function bringIn(deps: TaskDeps, row: ImportRecord, actor: Actor, signal?:
     const duplicates = slice.filter((each) => findEqual(offeredBy(each)) !== null);
     const fresh = slice.filter((each) => !duplicates.includes(each));
     const started = performance.now();
-    if (fresh.length > 0) runCommand(db, actor, growDelivery, { deliveryId, readings: fresh.map(deliveredBy) }, run);
+    if (fresh.length > 0)
+      runCommand(db, actor, growDelivery, { deliveryId, readings: fresh.map(deliveredBy) }, run);
     pace.took(performance.now() - started, slice.length);
     await breathe();
-    progress = countSlice(db, progress, slice, duplicates, clock.now());
-    await breathe();
+    progress = counted(progress, slice, duplicates, clock.now());
+    if (duplicates.length > 0 || performance.now() - notedAt > NOTE_MS) {
+      note(db, progress, duplicates);
+      notedAt = performance.now();
+      await breathe();
+    }
   }
+  note(db, progress, []);
   runCommand(db, actor, finishCommit, { importId: row.id }, run);
 }
 

@@ -124,7 +124,9 @@ export class Staging {
       return duplicate("already-in-force", `This very reading is stored already${from}.`);
     }
     const twin = this.#statements.twin.get({ identity });
-    return twin ? duplicate("twice-in-file", `The same reading stands on line ${twin.line} of this file.`) : null;
+    return twin
+      ? duplicate("twice-in-file", `The same reading stands on line ${twin.line} of this file.`)
+      : null;
   }
 
   /** Readings of this file that would be stored with one, of the 24 h before it. */

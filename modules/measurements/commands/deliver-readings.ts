@@ -33,7 +33,11 @@ export const openDelivery = defineCommand({
       .get();
     return {
       result: { deliveryId: row.id },
-      event: { kind: measurementsEvents.deliveryOpened, subject: { type: "delivery", id: row.id }, payload: { sourceRef } },
+      event: {
+        kind: measurementsEvents.deliveryOpened,
+        subject: { type: "delivery", id: row.id },
+        payload: { sourceRef },
+      },
     };
   },
 });
@@ -42,11 +46,15 @@ export const openDelivery = defineCommand({
 export const growDelivery = defineCommand({
   verb: "growDelivery",
   permission: measurementsMay.deliver,
-  input: z.strictObject({ deliveryId: z.number().int(), readings: z.array(deliveredReadingInput).min(1).max(500) }),
+  input: z.strictObject({
+    deliveryId: z.number().int(),
+    readings: z.array(deliveredReadingInput).min(1).max(500),
+  }),
   run(ctx, { deliveryId, readings }) {
     invariant(ctx.actor.personId !== null, "a person brings in readings");
     const row = getDelivery(ctx.db, deliveryId);
-    if (row.publishedAt !== null) throw new Problem("conflict", "These readings have been published; nothing can be added.");
+    if (row.publishedAt !== null)
+      throw new Problem("conflict", "These readings have been published; nothing can be added.");
     const intake = {
       db: ctx.db,
       at: ctx.at,
@@ -101,7 +109,8 @@ export const publishDelivery = defineCommand({
   permission: measurementsMay.deliver,
   input: z.strictObject({ deliveryId: z.number().int() }),
   run(ctx, { deliveryId }) {
-    if (getDelivery(ctx.db, deliveryId).publishedAt !== null) throw new Problem("conflict", "These readings are visible already.");
+    if (getDelivery(ctx.db, deliveryId).publishedAt !== null)
+      throw new Problem("conflict", "These readings are visible already.");
     ctx.db.update(delivery).set({ publishedAt: ctx.at }).where(eq(delivery.id, deliveryId)).run();
     judgeTouchedSeries(ctx, deliveryId, "delivery");
     return {
@@ -115,10 +124,14 @@ export const publishDelivery = defineCommand({
 export const withdrawDelivery = defineCommand({
   verb: "withdrawDelivery",
   permission: measurementsMay.withdrawDelivery,
-  input: z.strictObject({ deliveryId: z.number().int(), reason: z.string().trim().min(3, "Say why.").max(500) }),
+  input: z.strictObject({
+    deliveryId: z.number().int(),
+    reason: z.string().trim().min(3, "Say why.").max(500),
+  }),
   run(ctx, { deliveryId, reason }) {
     const row = getDelivery(ctx.db, deliveryId);
-    if (row.withdrawnAt !== null) throw new Problem("conflict", "These readings have been withdrawn already.");
+    if (row.withdrawnAt !== null)
+      throw new Problem("conflict", "These readings have been withdrawn already.");
     ctx.db
       .update(delivery)
       .set({ withdrawnAt: ctx.at, withdrawnBy: ctx.actor.personId, withdrawnReason: reason })
@@ -127,7 +140,11 @@ export const withdrawDelivery = defineCommand({
     judgeTouchedSeries(ctx, deliveryId, "withdrawal");
     return {
       result: { deliveryId },
-      event: { kind: measurementsEvents.deliveryWithdrawn, subject: { type: "delivery", id: deliveryId }, reason },
+      event: {
+        kind: measurementsEvents.deliveryWithdrawn,
+        subject: { type: "delivery", id: deliveryId },
+        reason,
+      },
     };
   },
 });

@@ -17,7 +17,11 @@ const LONG = writeCsv(HEADER, [
   ["KELP-01", "ammonia_n", "<0.05", "mg/L", "2026-03-01 09:00"],
 ]);
 
-function benchWithAnalyst(): { bench: TestBench; ada: ReturnType<TestBench["person"]>; water: ReturnType<typeof waterFor> } {
+function benchWithAnalyst(): {
+  bench: TestBench;
+  ada: ReturnType<TestBench["person"]>;
+  water: ReturnType<typeof waterFor>;
+} {
   const bench = testBench();
   const ada = bench.person("Ada Finch", ["analyst"]);
   return { bench, ada, water: waterFor(bench) };
@@ -54,7 +58,8 @@ describe("a file of readings", () => {
 
   it("with decimal commas is read by the file's own sign", async () => {
     const { bench, ada } = benchWithAnalyst();
-    const text = "System;Parameter;Value;Taken at\nKELP-01;temperature;12,5;2026-03-01 09:00\nKELP-01;temperature;1,234;2026-03-01 10:00\n";
+    const text =
+      "System;Parameter;Value;Taken at\nKELP-01;temperature;12,5;2026-03-01 09:00\nKELP-01;temperature;1,234;2026-03-01 10:00\n";
     const done = await committed(bench, ada, "comma.csv", text);
     expect(done).toMatchObject({ state: "committed", acceptedCount: 2 });
     expect(inForce(bench).map((row) => [row.typed_text, row.value])).toEqual([
@@ -96,13 +101,29 @@ describe("a file of readings", () => {
   it("foresees a change in 24 h against the file's own rows, and judges it when all are there", async () => {
     const { bench, ada, water } = benchWithAnalyst();
     water.limit(water.temperatureId, { kind: "constant", bounds: { greatestChange24h: 1 } });
-    const at = (value: string, hour: string) => ["KELP-01", "temperature", value, "", `2026-03-01 ${hour}:00`];
-    const before = await checked(bench, ada, "a.csv", writeCsv(HEADER, [at("24.0", "06"), at("24.6", "12"), at("25.2", "18")]));
+    const at = (value: string, hour: string) => [
+      "KELP-01",
+      "temperature",
+      value,
+      "",
+      `2026-03-01 ${hour}:00`,
+    ];
+    const before = await checked(
+      bench,
+      ada,
+      "a.csv",
+      writeCsv(HEADER, [at("24.0", "06"), at("24.6", "12"), at("25.2", "18")]),
+    );
     expect(before.statusCounts).toMatchObject({ within: 2, out: 1 });
     await work(bench);
     bench.run(ada, discardImport, { importId: before.id });
     // The middle one comes last: what depends on it is judged again after the commit.
-    await committed(bench, ada, "b.csv", writeCsv(HEADER, [at("24.0", "06"), at("25.2", "18"), at("24.6", "12")]));
+    await committed(
+      bench,
+      ada,
+      "b.csv",
+      writeCsv(HEADER, [at("24.0", "06"), at("25.2", "18"), at("24.6", "12")]),
+    );
     expect(inForce(bench).map((row) => row.status)).toEqual(["within", "within", "out"]);
   });
 });
@@ -164,7 +185,9 @@ describe("what is there already", () => {
   it("stays out when somebody else stores it between check and commit", async () => {
     const { bench, ada, water } = benchWithAnalyst();
     const { id } = await checked(bench, ada, "long.csv", LONG);
-    bench.run(ada, recordReadings, { readings: [water.reading(water.temperatureId, "12.4", Date.UTC(2026, 2, 1, 9))] });
+    bench.run(ada, recordReadings, {
+      readings: [water.reading(water.temperatureId, "12.4", Date.UTC(2026, 2, 1, 9))],
+    });
     bench.run(ada, startCommit, { importId: id });
     await work(bench);
     expect(detail(bench, ada, id)).toMatchObject({ state: "committed", acceptedCount: 2, duplicateCount: 1 });
@@ -186,7 +209,10 @@ describe("a withdrawn import", () => {
     });
     const kept = bench.db.reader.sqlite.prepare("select count(*) as n from measurements_reading").get();
     expect(kept).toEqual({ n: 3 });
-    expect(await committed(bench, ada, "long.csv", LONG)).toMatchObject({ state: "committed", acceptedCount: 3 });
+    expect(await committed(bench, ada, "long.csv", LONG)).toMatchObject({
+      state: "committed",
+      acceptedCount: 3,
+    });
     expect(inForce(bench)).toHaveLength(3);
   });
 
@@ -195,11 +221,15 @@ describe("a withdrawn import", () => {
     const olu = bench.person("Olu Penrose", ["operator"]);
     const done = await committed(bench, ada, "long.csv", LONG);
     expect(() => bench.run(ada, withdrawImport, { importId: done.id, reason: " " })).toThrow();
-    expect(() => bench.run(olu, withdrawImport, { importId: done.id, reason: "No good." })).toThrow(/does not allow/);
+    expect(() => bench.run(olu, withdrawImport, { importId: done.id, reason: "No good." })).toThrow(
+      /does not allow/,
+    );
     expect(inForce(bench)).toHaveLength(3);
     expect(() => bench.run(ada, discardImport, { importId: done.id })).toThrow(/withdrawn/);
     bench.run(ada, withdrawImport, { importId: done.id, reason: "The probe was off." });
-    expect(() => bench.run(ada, withdrawImport, { importId: done.id, reason: "Once more." })).toThrow(/withdrawn/);
+    expect(() => bench.run(ada, withdrawImport, { importId: done.id, reason: "Once more." })).toThrow(
+      /withdrawn/,
+    );
   });
 });
 
@@ -241,7 +271,10 @@ describe("who may import", () => {
     const { suspendPerson } = await import("@/modules/identity");
     bench.run(ends, suspendPerson, { personId: ada.personId ?? 0, reason: "Has left." });
     await work(bench);
-    expect(detail(bench, olu, id)).toMatchObject({ state: "failed", problem: expect.stringContaining("may not import") });
+    expect(detail(bench, olu, id)).toMatchObject({
+      state: "failed",
+      problem: expect.stringContaining("may not import"),
+    });
     expect(inForce(bench)).toEqual([]);
   });
 });
