@@ -46,9 +46,11 @@ export type ListedEntry = Act & {
   hash: string;
 };
 
-/** One row before and after, as JSON. */
+/** One row before and after, as JSON; where it supersedes another record, that one too. */
 export type RowChange = {
   id: number;
+  rowKey: string;
+  superseded: { key: string; row: string } | null;
   operation: "insert" | "update" | "delete" | "migrate";
   before: string | null;
   after: string | null;

@@ -1,10 +1,9 @@
-import { and, desc, eq } from "drizzle-orm";
 import type { Orm } from "@/db/database";
 import { notFound } from "@/lib/problem";
 import { processSingleton } from "@/lib/process-singleton";
 import { type Actor, may, type Permission, visibleAreas } from "@/modules/access";
 import { auditMay } from "./abilities";
-import { auditChange } from "./schema";
+import { newestRow } from "./lineage";
 
 /** Who may read the history of a table's records: whoever may see the records themselves. */
 export type RecordGate = {
@@ -24,19 +23,6 @@ export function useRecordGates(gates: RecordGates): void {
   registry.gates = gates;
 }
 
-/** A row as its newest change left it (or as it was before it went). */
-function newestRow(db: Orm, table: string, key: string): Record<string, unknown> | null {
-  const change = db
-    .select({ before: auditChange.before, after: auditChange.after })
-    .from(auditChange)
-    .where(and(eq(auditChange.tableName, table), eq(auditChange.rowKey, key)))
-    .orderBy(desc(auditChange.id))
-    .limit(1)
-    .get();
-  const row = change?.after ?? change?.before;
-  return row ? (JSON.parse(row) as Record<string, unknown>) : null;
-}
-
 const MOST_STEPS = 6;
 
 /** The area of a record, by following its gates; null where a step leads nowhere. */
@@ -46,7 +32,8 @@ function areaOf(db: Orm, table: string, key: string): number | null {
     const path = registry.gates[at.table]?.area;
     if (path === undefined) return null;
     if (path === "itself") return Number(at.key);
-    const next = newestRow(db, at.table, at.key)?.[path[0]];
+    const row = newestRow(db, at.table, at.key);
+    const next = row === null ? null : (JSON.parse(row) as Record<string, unknown>)[path[0]];
     if (next === null || next === undefined) return null;
     at = { table: path[1], key: String(next) };
   }

@@ -1,4 +1,4 @@
-import { eq, isNull } from "drizzle-orm";
+import { isNull } from "drizzle-orm";
 import { z } from "zod";
 import { Problem } from "@/lib/problem";
 import { auditMay } from "../abilities";

@@ -3,6 +3,7 @@ import { z } from "zod";
 import { notFound } from "@/lib/problem";
 import { auditMay } from "../abilities";
 import { defineQuery } from "../define-query";
+import { supersededBy } from "../lineage";
 import { auditChange, auditEntry } from "../schema";
 
 const CHANGES_SHOWN = 50;
@@ -35,7 +36,10 @@ export const getEntry = defineQuery({
       .orderBy(backwards ? desc(auditChange.id) : asc(auditChange.id))
       .limit(limit + 1)
       .all();
-    const changes = rows.slice(0, limit);
+    const changes = rows.slice(0, limit).map((row) => ({
+      ...row,
+      superseded: row.operation === "insert" ? supersededBy(ctx.db, row.tableName, row.after) : null,
+    }));
     if (backwards) changes.reverse();
     const more = rows.length > limit;
     return {

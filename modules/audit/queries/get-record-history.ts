@@ -1,8 +1,9 @@
-import { and, desc, eq, lt, lte, sql } from "drizzle-orm";
+import { and, desc, eq, inArray, lt, lte } from "drizzle-orm";
 import { z } from "zod";
 import { notFound } from "@/lib/problem";
 import { auditMay } from "../abilities";
 import { defineQuery } from "../define-query";
+import { supersededBy, versionsOf } from "../lineage";
 import { mustSeeRecord } from "../record-gates";
 import { auditChange, auditEntry } from "../schema";
 
@@ -24,7 +25,10 @@ const entryOfChange = {
   reason: auditEntry.reason,
 };
 
-/** The history of one record: each change with who and why, newest first. */
+/**
+ * The history of one record, its corrections included: each change with who and why, newest first. A version that supersedes
+ * another comes with the other as `superseded`.
+ */
 export const getRecordHistory = defineQuery({
   name: "getRecordHistory",
   permission: auditMay.readRecord,
@@ -36,9 +40,11 @@ export const getRecordHistory = defineQuery({
   }),
   run(ctx, { table, key, before, limit }) {
     mustSeeRecord(ctx, table, key);
+    const versions = versionsOf(ctx.db, table, key);
     const rows = ctx.db
       .select({
         id: auditChange.id,
+        rowKey: auditChange.rowKey,
         operation: auditChange.operation,
         before: auditChange.before,
         after: auditChange.after,
@@ -49,7 +55,7 @@ export const getRecordHistory = defineQuery({
       .where(
         and(
           eq(auditChange.tableName, table),
-          eq(auditChange.rowKey, key),
+          inArray(auditChange.rowKey, versions),
           before === undefined ? undefined : lt(auditChange.id, before),
         ),
       )
@@ -57,15 +63,19 @@ export const getRecordHistory = defineQuery({
       .limit(limit + 1)
       .all();
     if (rows.length === 0) throw notFound("such record");
-    return { table, key, changes: rows.slice(0, limit), hasOlder: rows.length > limit };
+    const changes = rows.slice(0, limit).map((row) => ({
+      ...row,
+      superseded: row.operation === "insert" ? supersededBy(ctx.db, table, row.after) : null,
+    }));
+    return { table, key, versions, changes, hasOlder: rows.length > limit };
   },
 });
 
 export type RecordHistory = ReturnType<typeof getRecordHistory.run>;
 
 /**
- * A record as it was at a moment (UTC epoch ms, what was done in that very millisecond included), rebuilt from its changes.
- * `row` is null where there was no such record then: not yet, or not any more.
+ * A record as it was at a moment (UTC epoch ms, what was done in that very millisecond included), rebuilt from its changes:
+ * the version that was in force then. `row` is null where there was no such record then: not yet, or not any more.
  */
 export const getRecordAt = defineQuery({
   name: "getRecordAt",
@@ -73,29 +83,31 @@ export const getRecordAt = defineQuery({
   input: z.strictObject({ ...record, at: z.coerce.number().int() }),
   run(ctx, { table, key, at }) {
     mustSeeRecord(ctx, table, key);
+    const changesOf = and(
+      eq(auditChange.tableName, table),
+      inArray(auditChange.rowKey, versionsOf(ctx.db, table, key)),
+    );
     const found = ctx.db
-      .select({ after: auditChange.after, ...entryOfChange })
+      .select({ after: auditChange.after, rowKey: auditChange.rowKey, ...entryOfChange })
       .from(auditChange)
       .innerJoin(auditEntry, eq(auditEntry.id, auditChange.entryId))
-      .where(and(eq(auditChange.tableName, table), eq(auditChange.rowKey, key), lte(auditEntry.at, at)))
+      .where(and(changesOf, lte(auditEntry.at, at)))
       .orderBy(desc(auditChange.id))
       .limit(1)
       .get();
-    if (!found && !recordExists(ctx, table, key)) throw notFound("such record");
-    const row = found?.after ? (JSON.parse(found.after) as Record<string, unknown>) : null;
-    return { table, key, at, row, entry: found ? withoutRow(found) : null };
+    const known =
+      found ?? ctx.db.select({ id: auditChange.id }).from(auditChange).where(changesOf).limit(1).get();
+    if (!known) throw notFound("such record");
+    if (!found) return { table, key, at, row: null, entry: null };
+    const { after, ...entry } = found;
+    return {
+      table,
+      key,
+      at,
+      row: after === null ? null : (JSON.parse(after) as Record<string, unknown>),
+      entry,
+    };
   },
 });
 
 export type RecordAt = ReturnType<typeof getRecordAt.run>;
-
-function withoutRow<T extends { after: unknown }>({ after: _row, ...entry }: T): Omit<T, "after"> {
-  return entry;
-}
-
-function recordExists(ctx: Parameters<typeof getRecordAt.run>[0], table: string, key: string): boolean {
-  const found = ctx.db.get<{ n: number }>(
-    sql`select 1 as n from audit_change where table_name = ${table} and row_key = ${key} limit 1`,
-  );
-  return found !== undefined;
-}

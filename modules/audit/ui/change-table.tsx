@@ -1,22 +1,25 @@
 import { type DataColumn, DataTable } from "@/lib/ui";
+import type { RowChange } from "../model";
 import { type FieldChange, fieldChanges, readRow } from "./field-words";
 import type { HistoryWords } from "./history-words";
 import { ValueText } from "./value-text";
 
 export interface ChangeTableProps {
   caption: string;
-  operation: string;
-  before: string | null;
-  after: string | null;
+  change: Pick<RowChange, "operation" | "before" | "after" | "superseded">;
   words: HistoryWords;
   /** Fields that did not change too. */
   all?: boolean;
 }
 
-/** A row before and after, field by field; by default those fields alone that differ. */
-export function ChangeTable({ caption, operation, before, after, words, all = false }: ChangeTableProps) {
-  const isNew = operation === "insert";
-  const fields = fieldChanges(readRow(before), readRow(after)).filter((field) => all || field.differs);
+/** A row before and after, field by field; by default those fields alone that differ. A correction stands beside what it
+ * corrects. */
+export function ChangeTable({ caption, change, words, all = false }: ChangeTableProps) {
+  const { operation, superseded } = change;
+  const before = superseded?.row ?? change.before;
+  const isNew = operation === "insert" && superseded === null;
+  const fields = fieldChanges(readRow(before), readRow(change.after)).filter((field) => all || field.differs);
+  const beforeHead = superseded === null ? "Before" : `Before (number ${superseded.key})`;
   const columns: DataColumn<FieldChange>[] = [
     {
       id: "field",
@@ -24,7 +27,7 @@ export function ChangeTable({ caption, operation, before, after, words, all = fa
       rowHead: true,
       cell: (field) => <span title={field.name}>{field.word}</span>,
     },
-    ...(isNew ? [] : [valueColumn("before", "Before", words)]),
+    ...(isNew ? [] : [valueColumn("before", beforeHead, words)]),
     valueColumn("after", isNew ? "As it was made" : "After", words),
   ];
   return (

@@ -10,7 +10,7 @@ import { SubjectText } from "./subject-text";
 
 export interface EntryDetailProps {
   entry: ListedEntry & { roles: string; payload: string; prevHash: string; requestId: string | null };
-  changes: readonly (RowChange & { tableName: string; rowKey: string })[];
+  changes: readonly (RowChange & { tableName: string })[];
   words: HistoryWords;
   /** Fields that did not change too. */
   all: boolean;
@@ -89,21 +89,14 @@ function ChangePanel({
   return (
     <Panel
       title={<span className="inline-block first-letter:uppercase">{title}</span>}
-      aside={DONE[operation]}
+      aside={change.superseded === null ? DONE[operation] : "corrected: a new version beside the old one"}
       actions={
         <RecordHistoryLink table={tableName} id={rowKey}>
           All that happened to it
         </RecordHistoryLink>
       }
     >
-      <ChangeTable
-        caption={`Fields of ${title}`}
-        operation={operation}
-        before={change.before}
-        after={change.after}
-        words={words}
-        all={all}
-      />
+      <ChangeTable caption={`Fields of ${title}`} change={change} words={words} all={all} />
     </Panel>
   );
 }

@@ -69,9 +69,7 @@ function ChangePanel({
       {change.reason !== null && <p className="mb-2 text-ink-2">“{change.reason}”</p>}
       <ChangeTable
         caption={`${said}, ${formatLocal(change.at, words.zone, "second")}`}
-        operation={change.operation}
-        before={change.before}
-        after={change.after}
+        change={change}
         words={words}
       />
     </Panel>
