@@ -28,6 +28,7 @@ function wordsOf(part: string, href: string, entries: readonly { href: string; l
   const plain = decoded(part);
   const known = PATH_WORDS[plain];
   if (known) return known;
+  if (/^\d{4}-\d{2}-\d{2}$/.test(plain)) return plain;
   // Codes such as KELP-01 stay as they are; words of an address begin with a capital.
   return /[A-Z]/.test(plain) ? plain : plain.charAt(0).toUpperCase() + plain.slice(1).replaceAll("-", " ");
 }

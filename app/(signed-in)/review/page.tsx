@@ -23,7 +23,7 @@ export default async function ReviewPage() {
   const waiting = sheets.filter(
     ({ state, counts }) => state !== "reviewed" && counts.readings + counts.gaps > 0,
   );
-  const finished = waiting.filter((sheet) => sheet.isOver);
+  const finished = waiting.filter((sheet) => sheet.isOver && sheet.state !== "returned");
   return (
     <>
       <PageHead

@@ -8,6 +8,8 @@ import { EmptyState, LinkButton, PageHead } from "@/lib/ui";
 import { addDays, isCalendarDay } from "@/lib/zone";
 import { may, mayInArea } from "@/modules/access";
 import { measurementsMay } from "@/modules/measurements";
+import { qualityMay } from "@/modules/quality";
+import { IncidentLink } from "@/modules/quality/ui/incident-link";
 import { getDaySheet } from "@/modules/rounds";
 import { AreaRound } from "@/modules/rounds/ui/area-round";
 import { DaySteps } from "@/modules/rounds/ui/day-steps";
@@ -82,6 +84,11 @@ export default async function RoundsPage({ searchParams }: Props) {
             zone={settings().STILLWELL_ZONE}
             now={systemClock.now()}
             mayEnter={mayEnter && mayInArea(actor, measurementsMay.record, area.id)}
+            besideOff={
+              mayInArea(actor, qualityMay.handle, area.id)
+                ? (readingId) => <IncidentLink readingId={readingId} />
+                : undefined
+            }
           />
         ))}
       </div>

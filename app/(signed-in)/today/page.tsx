@@ -12,7 +12,7 @@ import { EntriesTable } from "@/modules/audit/ui/entries-table";
 import { listWatch, measurementsMay } from "@/modules/measurements";
 import { countMail, notificationsMay } from "@/modules/notifications";
 import { listIncidents } from "@/modules/quality";
-import { IncidentList } from "@/modules/quality/ui/incident-list";
+import { IncidentLines } from "@/modules/quality/ui/incident-list";
 import { offNow } from "@/modules/rounds";
 import { OffNowList } from "@/modules/rounds/ui/off-now-list";
 import { weekdayWords } from "@/modules/rounds/ui/sheet-words";
@@ -92,13 +92,7 @@ async function OpenIncidents({ names, now }: { names: Record<number, string>; no
   if (rows.length === 0) return null;
   return (
     <Panel title="Open incidents" id="incidents" aside="the recheck that is due longest first">
-      <IncidentList
-        rows={rows}
-        caption="Open incidents"
-        names={names}
-        zone={settings().STILLWELL_ZONE}
-        now={now}
-      />
+      <IncidentLines rows={rows} names={names} zone={settings().STILLWELL_ZONE} now={now} />
     </Panel>
   );
 }

@@ -52,3 +52,24 @@ export function IncidentList({ rows, caption, names, zone, now }: IncidentListPr
     />
   );
 }
+
+/** Incidents as lines, for a narrow place: what, where, who is waited for. */
+export function IncidentLines({ rows, names, zone, now }: Omit<IncidentListProps, "caption">) {
+  return (
+    <ul className="divide-y divide-rule border-t border-rule">
+      {rows.map((row) => (
+        <li key={row.id} className="py-2.5">
+          <Link href={`/incidents/${row.id}`} className="link inline-block min-h-6 font-semibold">
+            <span className="num">{row.code}</span> {row.title}
+          </Link>
+          <p className="text-[0.9375rem] text-ink-2">
+            {whereWords(row)}.{" "}
+            <span className={isOverdue(row, now) ? "font-semibold text-out" : ""}>
+              {waitedFor(row, names, zone, now)}
+            </span>
+          </p>
+        </li>
+      ))}
+    </ul>
+  );
+}

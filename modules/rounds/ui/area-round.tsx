@@ -1,3 +1,4 @@
+import type { ReactNode } from "react";
 import { LinkButton, Panel } from "@/lib/ui";
 import type { Bounds } from "@/modules/measurements/model";
 import type { FacilityParameter } from "@/modules/methods/model";
@@ -20,6 +21,8 @@ export interface AreaRoundProps {
   zone: string;
   now: number;
   mayEnter: boolean;
+  /** What stands beside a reading that is off and not explained. */
+  besideOff?: ((readingId: number) => ReactNode) | undefined;
 }
 
 /** An area's day on the page of rounds: what is off first, then what is missing. */

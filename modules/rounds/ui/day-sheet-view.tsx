@@ -1,3 +1,4 @@
+import type { ReactNode } from "react";
 import { Panel, TimeText } from "@/lib/ui";
 import type { Bounds } from "@/modules/measurements/model";
 import type { FacilityParameter } from "@/modules/methods/model";
@@ -30,6 +31,8 @@ export interface DaySheetViewProps {
   now: number;
   mayReview: boolean;
   mayEnter: boolean;
+  /** What stands beside a reading that is off and not explained. */
+  besideOff?: ((readingId: number) => ReactNode) | undefined;
 }
 
 /** The day sheet: what deviates, what is missing, the decision, then everything that was read. */

@@ -1,6 +1,7 @@
 import Link from "next/link";
-import { StatusShape, StatusWord, TimeText } from "@/lib/ui";
-import type { Bounds } from "@/modules/measurements/model";
+import type { ReactNode } from "react";
+import { StatusShape, TimeText } from "@/lib/ui";
+import { type Bounds, STATUS_WORDS } from "@/modules/measurements/model";
 import type { FacilityParameter } from "@/modules/methods/model";
 import type { OldValue, SheetLine } from "../model";
 import { type Deviation, deviationsOf } from "../rules/deviations";
@@ -14,6 +15,8 @@ export interface DeviationListProps {
   oldValues: Readonly<Record<number, OldValue>>;
   names: Names;
   zone: string;
+  /** What stands beside a reading that is off and not explained: the way to take it up. */
+  besideOff?: ((readingId: number) => ReactNode) | undefined;
 }
 
 const TONES: Readonly<Record<string, string>> = {
@@ -55,11 +58,9 @@ function DeviationItem({ deviation, ...props }: DeviationListProps & { deviation
           >
             {line.systemCode} {parameter.name} <ReadingFigure reading={line} parameter={parameter} />
           </Link>
-          {isPlain ? (
-            <span className="text-ink-3">within</span>
-          ) : (
-            <StatusWord status={line.status} direction={direction} />
-          )}
+          <span className={`font-semibold ${TONES[line.status] ?? "font-normal text-ink-3"}`}>
+            {STATUS_WORDS[line.status]}
+          </span>
         </p>
         {!isPlain && <p className="text-[0.9375rem] text-ink-2">{line.sentence}</p>}
         <p className="text-sm text-ink-3">
@@ -67,10 +68,13 @@ function DeviationItem({ deviation, ...props }: DeviationListProps & { deviation
           {line.note !== null && line.note !== "" && ` · “${line.note}”`}
         </p>
         <Marks line={line} marks={marks} parameter={parameter} {...props} />
+        {marks.includes("unexplained") && (
+          <div className="mt-2 print:hidden">{props.besideOff?.(line.readingId)}</div>
+        )}
       </div>
       <span className="hidden pt-1 sm:block">
         <LineStrip
-          value={line.value}
+          value={line.qualifier === "" ? line.value : null}
           status={line.status}
           bounds={bounds[line.readingId]}
           parameter={parameter}

@@ -60,7 +60,7 @@ function OffItem({ item, names, now, mayEnter }: Omit<OffNowListProps, "items"> 
       </div>
       <span className="self-center">
         <LineStrip
-          value={newest.value}
+          value={newest.qualifier === "" ? newest.value : null}
           previous={previous?.value ?? null}
           status={newest.status}
           bounds={limits.state === "in-force" ? limits.bounds : undefined}

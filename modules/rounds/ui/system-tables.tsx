@@ -82,7 +82,12 @@ function SystemTable({ code, lines, parameters, bounds, names, zone }: SystemTab
             if (!parameter) return null;
             const limits = bounds[line.readingId];
             return (
-              <LineStrip value={line.value} status={line.status} bounds={limits} parameter={parameter} />
+              <LineStrip
+                value={line.qualifier === "" ? line.value : null}
+                status={line.status}
+                bounds={limits}
+                parameter={parameter}
+              />
             );
           },
         },

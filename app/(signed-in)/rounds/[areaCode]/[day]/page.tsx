@@ -9,6 +9,8 @@ import { PageHead } from "@/lib/ui";
 import { addDays, isCalendarDay } from "@/lib/zone";
 import { may, mayInArea } from "@/modules/access";
 import { measurementsMay } from "@/modules/measurements";
+import { qualityMay } from "@/modules/quality";
+import { IncidentLink } from "@/modules/quality/ui/incident-link";
 import { getDaySheet, roundsMay } from "@/modules/rounds";
 import { DaySheetView } from "@/modules/rounds/ui/day-sheet-view";
 import { DaySteps } from "@/modules/rounds/ui/day-steps";
@@ -65,6 +67,11 @@ export default async function DaySheetPage({ params }: Props) {
         now={systemClock.now()}
         mayReview={may(actor, roundsMay.review)}
         mayEnter={mayInArea(actor, measurementsMay.record, area.id)}
+        besideOff={
+          mayInArea(actor, qualityMay.handle, area.id)
+            ? (readingId) => <IncidentLink readingId={readingId} />
+            : undefined
+        }
       />
     </>
   );
