@@ -1,6 +1,7 @@
 import "server-only";
 import { type Actor, may, type Permission } from "@/modules/access";
 import { auditMay } from "@/modules/audit";
+import { importsMay } from "@/modules/imports";
 import { measurementsMay } from "@/modules/measurements";
 import { qualityMay } from "@/modules/quality";
 import { roundsMay } from "@/modules/rounds";
@@ -32,6 +33,7 @@ export const MENU: readonly MenuEntry[] = [
   },
   { href: "/systems", label: "Systems", for: [systemsMay.read] },
   { href: "/charts", label: "Charts", for: [measurementsMay.read] },
+  { href: "/imports", label: "Imports", for: [importsMay.read] },
   {
     href: "/incidents",
     label: "Incidents",

@@ -1,5 +1,6 @@
 import "server-only";
 import { backUpTask, type ReactionTable, verifyCopyTask, type WorkTable } from "@/modules/audit";
+import { checkImport, commitImport } from "@/modules/imports";
 import { judgeSeriesAgain } from "@/modules/measurements";
 import { deliverMail } from "@/modules/notifications";
 import { dailyCheckpoint } from "@/modules/signoff";
@@ -8,4 +9,12 @@ import { dailyCheckpoint } from "@/modules/signoff";
 export const REACTIONS: ReactionTable = {};
 
 /** Everything that the job runner can carry out by name. */
-export const WORK: WorkTable = [deliverMail, dailyCheckpoint, backUpTask, verifyCopyTask, judgeSeriesAgain];
+export const WORK: WorkTable = [
+  deliverMail,
+  dailyCheckpoint,
+  backUpTask,
+  verifyCopyTask,
+  judgeSeriesAgain,
+  checkImport,
+  commitImport,
+];

@@ -5,6 +5,7 @@ import { systemClock } from "@/lib/clock";
 import { settings } from "@/lib/env";
 import { log } from "@/lib/log";
 import { processSingleton } from "@/lib/process-singleton";
+import { clearArriving } from "@/lib/storage";
 import { JobRunner, migrateDatabase } from "@/modules/audit";
 import { scheduleCheckpoint } from "@/modules/signoff";
 import { WORK } from "./reactions";
@@ -16,6 +17,9 @@ export function start(): void {
   const { migrated } = migrateDatabase(database(), systemClock);
   prepareRuntime();
   markServing(dataFolder);
+  clearArriving(dataFolder).catch((err: unknown) =>
+    log().warn({ err }, "what was arriving could not be cleared"),
+  );
   if (STILLWELL_JOBS) {
     scheduleCheckpoint(database(), systemClock);
     processSingleton("jobs", () => {
