@@ -15,6 +15,7 @@ export const FieldContext = createContext<FieldContextValue | null>(null);
 export function useFieldAttributes(own: {
   id?: string | undefined;
   "aria-describedby"?: string | undefined;
+  "aria-invalid"?: boolean | "true" | "false" | "grammar" | "spelling" | undefined;
 }): {
   id: string | undefined;
   "aria-describedby": string | undefined;
@@ -26,7 +27,8 @@ export function useFieldAttributes(own: {
   return {
     id: own.id ?? field?.id,
     "aria-describedby": described || undefined,
-    "aria-invalid": field?.invalid ? true : undefined,
+    "aria-invalid":
+      field?.invalid || own["aria-invalid"] === true || own["aria-invalid"] === "true" ? true : undefined,
     "aria-required": field?.required ? true : undefined,
   };
 }

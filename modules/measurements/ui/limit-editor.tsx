@@ -12,7 +12,6 @@ import {
   PageHead,
   Panel,
   sendCommand,
-  Textarea,
   TextInput,
   useLiveMessage,
   useProblemForm,
@@ -121,7 +120,7 @@ export function LimitEditor({
               <TextInput {...form.register("title")} />
             </Field>
             <Field label="Reason" name="reason" required error={errorOf("reason")}>
-              <Textarea rows={1} {...form.register("reason")} />
+              <TextInput {...form.register("reason")} />
             </Field>
             <Field
               label="Hold from"
@@ -199,7 +198,7 @@ export function LimitEditor({
         )}
         <div className="flex flex-wrap items-center gap-2.5">
           <Button variant="next" type="submit" busy={sending} busyText="Sending">
-            Propose {changed.length === 1 ? "1 change" : `${changed.length} changes`}
+            {proposeWords(changed.length)}
           </Button>
           <LinkButton href={systemCode === null ? "/setup/limits" : `/setup/limits?system=${systemCode}`}>
             Cancel
@@ -209,6 +208,11 @@ export function LimitEditor({
       </div>
     </form>
   );
+}
+
+function proposeWords(count: number): string {
+  if (count === 0) return "Propose the changes";
+  return count === 1 ? "Propose 1 change" : `Propose ${count} changes`;
 }
 
 function localText(at: number, zone: string): string {

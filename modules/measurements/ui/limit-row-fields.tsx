@@ -22,7 +22,7 @@ const KIND_WORDS: Readonly<Record<DraftKind, string>> = {
 
 /** Columns of the sheet on a desk: what, how, six limits, and what removes the row. Below that each row is a card. */
 export const SHEET_COLUMNS =
-  "grid grid-cols-2 gap-x-2.5 gap-y-2 sm:grid-cols-3 xl:grid-cols-[minmax(10rem,1.5fr)_8.75rem_repeat(6,minmax(5.25rem,1fr))_auto]";
+  "grid grid-cols-2 gap-x-2.5 gap-y-2 sm:grid-cols-3 xl:grid-cols-[minmax(10rem,1.5fr)_8.75rem_repeat(6,minmax(5.25rem,1fr))_5.25rem]";
 
 export interface LimitRowFieldsProps {
   /** What the row is called, for sentences and for those who hear it. */
@@ -71,7 +71,7 @@ export const LimitRowFields = memo(function LimitRowFields(props: LimitRowFields
       <Button
         size="small"
         variant="quiet"
-        className="max-xl:col-span-full max-xl:justify-self-start xl:col-start-9 xl:row-start-1"
+        className="max-xl:col-span-full max-xl:justify-self-start xl:col-start-9 xl:row-start-1 xl:self-center"
         aria-label={`Take ${name} off the sheet`}
         onClick={onRemove}
       >

@@ -31,7 +31,7 @@ export function boundsWords(bounds: Bounds, decimals: number): string[] {
     tolerance === null ? null : `tolerance ${tolerance}`,
     bounds.greatestChange24h === undefined
       ? null
-      : `change at most ${show(bounds.greatestChange24h)} in any 24 h`,
+      : `change at most ${show(bounds.greatestChange24h)} in any 24\u00a0h`,
   ].filter((words) => words !== null);
 }
 

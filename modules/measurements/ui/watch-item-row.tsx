@@ -51,7 +51,7 @@ export function WatchItemRow(props: WatchItemRowProps) {
       </Field>
       <Field label={<Short text="Typed in" of={name} />} required>
         <Select
-          placeholder={parameter?.unit ? `${unitLabel(parameter.unit)} (stored)` : "no unit"}
+          placeholder={parameter?.unit ? unitLabel(parameter.unit) || parameter.unit : "no unit"}
           options={(parameter?.acceptedUnits ?? [])
             .filter((code) => code !== parameter?.unit)
             .map((code) => ({ value: code, label: unitLabel(code) || code }))}

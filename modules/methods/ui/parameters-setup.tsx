@@ -166,7 +166,7 @@ const actColumn = (setOpen: (open: Open) => void): DataColumn<FacilityParameter>
   tight: true,
   cell: (parameter) =>
     !parameter.isRetired && (
-      <span className="flex flex-wrap justify-end gap-2">
+      <span className="flex justify-end gap-2 max-sm:flex-wrap">
         <Button
           size="small"
           aria-label={`Edit ${parameter.name}`}
