@@ -71,9 +71,26 @@ export function ReviewList({ rows, mayReview }: { rows: readonly ReviewRow[]; ma
               </Link>
             ),
           },
-          { id: "count", head: "Readings", numeric: true, cell: (row) => row.counts.readings },
-          { id: "found", head: "What deviates", cell: (row) => <Found row={row} /> },
-          { id: "state", head: "State", cell: (row) => <StateWords row={row} /> },
+          {
+            id: "count",
+            head: "Readings",
+            numeric: true,
+            wideOnly: true,
+            cell: (row) => row.counts.readings,
+          },
+          {
+            id: "found",
+            head: "What deviates",
+            cell: (row) => (
+              <>
+                <Found row={row} />
+                <span className="block sm:hidden">
+                  <StateWords row={row} />
+                </span>
+              </>
+            ),
+          },
+          { id: "state", head: "State", wideOnly: true, cell: (row) => <StateWords row={row} /> },
         ]}
       />
       {mayReview && (

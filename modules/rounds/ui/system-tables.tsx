@@ -57,10 +57,15 @@ function SystemTable({ code, lines, parameters, bounds, names, zone }: SystemTab
           head: "Parameter",
           rowHead: true,
           cell: (line) => (
-            <Link href={`/readings/${line.readingId}`} className="link inline-block min-h-6">
-              {of(line)?.name ?? line.parameterCode}
-              {hasPoints && <span className="font-normal">, {line.pointCode.toLowerCase()}</span>}
-            </Link>
+            <>
+              <Link href={`/readings/${line.readingId}`} className="link inline-block min-h-6">
+                {of(line)?.name ?? line.parameterCode}
+                {hasPoints && <span className="font-normal">, {line.pointCode.toLowerCase()}</span>}
+              </Link>
+              <span className="block font-normal sm:hidden">
+                <LineStatus line={line} /> <Taken line={line} names={names} zone={zone} />
+              </span>
+            </>
           ),
         },
         {
@@ -94,23 +99,33 @@ function SystemTable({ code, lines, parameters, bounds, names, zone }: SystemTab
         {
           id: "status",
           head: "Status",
-          cell: (line) => (
-            <StatusWord
-              status={line.status}
-              direction={line.side === "low" || line.side === "high" ? line.side : null}
-            />
-          ),
+          wideOnly: true,
+          cell: (line) => <LineStatus line={line} />,
         },
         {
           id: "who",
           head: "Taken",
-          cell: (line) => (
-            <span className="text-sm text-ink-2">
-              <TimeText at={line.takenAt} zone={zone} show="time" /> {nameOf(names, line.takenBy)}
-            </span>
-          ),
+          wideOnly: true,
+          cell: (line) => <Taken line={line} names={names} zone={zone} />,
         },
       ]}
     />
+  );
+}
+
+function LineStatus({ line }: { line: SheetLine }) {
+  return (
+    <StatusWord
+      status={line.status}
+      direction={line.side === "low" || line.side === "high" ? line.side : null}
+    />
+  );
+}
+
+function Taken({ line, names, zone }: { line: SheetLine; names: Names; zone: string }) {
+  return (
+    <span className="text-sm text-ink-2">
+      <TimeText at={line.takenAt} zone={zone} show="time" /> {nameOf(names, line.takenBy)}
+    </span>
   );
 }

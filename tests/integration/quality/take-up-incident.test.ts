@@ -9,6 +9,7 @@ import {
   closeIncident,
   findOpenIncident,
   getIncident,
+  incidentOfReading,
   joinReading,
   listIncidents,
   openIncident,
@@ -131,6 +132,18 @@ describe("an incident", () => {
     read("14.0", NOON + HOUR_MS);
     bench.run(ines, closeIncident, { incidentId, closureText: CLOSURE });
     expect(bench.ask(joe, findOpenIncident, key)).toBeNull();
+  });
+
+  it("is told of beside a reading: the one it belongs to, or the open one about the same trouble", () => {
+    const { bench, joe, open, read } = begin();
+    const [first, later] = [read("19.1", NOON), read("19.4", NOON + HOUR_MS)];
+    const of = (readingId: number, who: Actor = joe) => bench.ask(who, incidentOfReading, { readingId });
+    expect(of(first)).toMatchObject({ joined: null, open: null });
+    const { incidentId } = open(first);
+    expect(of(first)).toMatchObject({ joined: { id: incidentId }, open: null });
+    expect(of(later)).toMatchObject({ joined: null, open: { id: incidentId } });
+    const bo = bench.person("Bo Lind", ["aquarist"], [waterFor(bench, "REEF").areaId]);
+    expect(refusal(() => of(first, bo))).toBe("not-found");
   });
 });
 

@@ -15,11 +15,21 @@ function begin() {
   const joe = bench.person("Joe Okafor", ["aquarist"]);
   const ines = bench.person("Ines Marlow", ["lead"]);
   const read = (who: typeof joe, text: string, at = NOON, confirmed = false) =>
-    bench.run(who, recordReadings, { readings: [water.reading(water.temperatureId, text, at, { confirmed })] }).readings[0]
-      ?.readingId ?? 0;
+    bench.run(who, recordReadings, {
+      readings: [water.reading(water.temperatureId, text, at, { confirmed })],
+    }).readings[0]?.readingId ?? 0;
   const shown = (who = ines, onDay = DAY) => bench.ask(who, getDaySheet, { areaId: water.areaId, onDay });
-  const review = (who: typeof joe, outcome: "reviewed" | "returned" = "reviewed", comment = "", hash = shown().sheet.contentHash) =>
-    bench.run(who, reviewDays, { outcome, comment, sheets: [{ areaId: water.areaId, onDay: DAY, contentHash: hash }] });
+  const review = (
+    who: typeof joe,
+    outcome: "reviewed" | "returned" = "reviewed",
+    comment = "",
+    hash = shown().sheet.contentHash,
+  ) =>
+    bench.run(who, reviewDays, {
+      outcome,
+      comment,
+      sheets: [{ areaId: water.areaId, onDay: DAY, contentHash: hash }],
+    });
   return { bench, water, joe, ines, read, shown, review };
 }
 
@@ -29,7 +39,11 @@ describe("a day sheet", () => {
     read(joe, "13.4");
     review(ines);
     expect(shown()).toMatchObject({ state: "reviewed", counts: { readings: 1 } });
-    expect(shown().signatures[0]).toMatchObject({ printedName: "Ines Marlow", meaning: "reviewed", holds: true });
+    expect(shown().signatures[0]).toMatchObject({
+      printedName: "Ines Marlow",
+      meaning: "reviewed",
+      holds: true,
+    });
     expect(verifyHistory(bench.db.reader.sqlite).findings).toEqual([]);
   });
 
@@ -37,7 +51,12 @@ describe("a day sheet", () => {
     const { bench, ines, joe, read, review, shown } = begin();
     const readingId = read(joe, "13.4");
     review(ines);
-    bench.run(joe, correctReading, { readingId, uuid: crypto.randomUUID(), typedText: "13.9", reason: "misread" });
+    bench.run(joe, correctReading, {
+      readingId,
+      uuid: crypto.randomUUID(),
+      typedText: "13.9",
+      reason: "misread",
+    });
     expect(shown().state).toBe("changed");
     expect(shown().signatures[0]?.holds).toBe(false);
     review(ines);
@@ -85,7 +104,9 @@ describe("a day sheet", () => {
     read(joe, "13.4");
     const sheets = [{ areaId: water.areaId, onDay: DAY, contentHash: shown().sheet.contentHash }];
     const input = { outcome: "reviewed" as const, comment: "", sheets };
-    expect(() => bench.run(ines, reviewDays, input, { passwordConfirmed: false })).toThrow("asks for your password");
+    expect(() => bench.run(ines, reviewDays, input, { passwordConfirmed: false })).toThrow(
+      "asks for your password",
+    );
     expect(() => bench.run(joe, reviewDays, input)).toThrow("does not allow");
     review(ines);
     expect(() => review(ines)).toThrow("reviewed already");

@@ -8,10 +8,10 @@ import { convertByFactor } from "@/lib/units/factors";
 import { mayInArea } from "@/modules/access";
 import { getOwnAccount, listPersonNames } from "@/modules/identity";
 import { listWatch, measurementsMay } from "@/modules/measurements";
-import { EntrySheet } from "@/modules/measurements/ui/entry-sheet";
 import { getSystem, listSystems } from "@/modules/systems";
 import { plainVolume } from "@/modules/systems/ui/volume-text";
 import { readingUnits } from "@/modules/systems/ui/volume-units";
+import { EntryWithIncidents } from "./entry-with-incidents";
 
 type Props = { params: Promise<{ code: string }> };
 
@@ -33,7 +33,7 @@ export default async function EntryPage({ params }: Props) {
   const { volume } = readingUnits(account?.preferredUnits ?? {});
   const shown = plainVolume(convertByFactor(system.volumeL ?? 0, "L", volume));
   return (
-    <EntrySheet
+    <EntryWithIncidents
       key={system.id}
       system={{ code: system.code, name: system.name }}
       facts={
