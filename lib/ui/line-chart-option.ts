@@ -57,11 +57,12 @@ const axisText = (colours: ChartPalette) => ({
   color: colours["ink-3"],
 });
 
-/** Days under a long stretch, times under a short one; always in the facility's zone. */
+/** Days under a long stretch, with their year under a longer one, times under a short one; in the facility's zone. */
 function timeAxis(data: ChartData, words: ChartWords, colours: ChartPalette): object {
   const [from, to] = timeRange(data);
   const formatter = (at: number) => {
     const [day = "", time = ""] = timeText(at, words.zone, "day-time").split(", ");
+    if (to - from > 400 * DAY_MS) return day;
     const short = day.replace(/ \d{4}$/, "");
     return to - from > 3 * DAY_MS ? short : `${time}\n${short}`;
   };

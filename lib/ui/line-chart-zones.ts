@@ -131,11 +131,14 @@ export function markSeries({ marks = [] }: ChartData, colours: ChartPalette): ob
             y: top,
             textAlign: leftward ? ("right" as const) : ("left" as const),
             fill: colours["ink-2"],
+            backgroundColor: colours.sheet,
             font: `12px ${colours.sans}`,
           },
         };
         return row < 0 ? [rule] : [rule, label];
       });
+      // words lie on the rules of their neighbours, never under them
+      children.sort((a, b) => Number(a.type === "text") - Number(b.type === "text"));
       return { type: "group", $mergeChildren: false, children } as ReturnType<CustomSeriesRenderItem>;
     },
     false,

@@ -70,6 +70,7 @@ export function LineChart(props: LineChartProps) {
   } = props;
   const words = useMemo<ChartWords>(() => ({ title, unit, decimals, zone }), [title, unit, decimals, zone]);
   const data = useMemo<ChartData>(() => ({ points, band, control, marks }), [points, band, control, marks]);
+  const label = useMemo(() => chartText(data, words), [data, words]);
   const place = useRef<HTMLDivElement>(null);
   const chart = useChart(place, data, words);
   const [spoken, setSpoken] = useState("");
@@ -99,7 +100,7 @@ export function LineChart(props: LineChartProps) {
         ref={place}
         role="application"
         aria-roledescription="chart"
-        aria-label={chartText(data, words)}
+        aria-label={label}
         aria-describedby={helpId}
         tabIndex={0}
         onKeyDown={onKeyDown}

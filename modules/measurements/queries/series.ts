@@ -71,7 +71,6 @@ export const listSeriesSlice = defineQuery({
     afterId: id.optional(),
   }),
   run(ctx, input): SeriesSlice {
-    visiblePoint(ctx, input.pointId);
     const rows = sliceRows(ctx, input);
     const last = rows.length < SLICE ? undefined : rows.at(-1);
     const slice: SeriesSlice = {
@@ -102,9 +101,10 @@ export const listSeriesSlice = defineQuery({
 
 type SliceInput = z.output<(typeof listSeriesSlice)["input"]>;
 
-/** The rows of one slice with everything that a file of them tells. */
-export function sliceRows(ctx: Pick<QueryContext, "db">, input: SliceInput) {
+/** The rows of one slice with everything that a file of them tells. @throws Problem `not-found` for another's area */
+export function sliceRows(ctx: QueryContext, input: SliceInput) {
   const { pointId, parameterId, fromAt, toAt, afterAt, afterId } = input;
+  visiblePoint(ctx, pointId);
   const isAfter =
     afterAt === undefined || afterId === undefined
       ? undefined

@@ -48,7 +48,7 @@ const columns = (days: number): DataColumn<Line>[] => [
   },
   {
     id: "within",
-    head: `Time within tolerance, ${days} days`,
+    head: `In tolerance, ${days} days`,
     numeric: true,
     cell: ({ summary }) => (
       <Quantity
@@ -65,6 +65,27 @@ const columns = (days: number): DataColumn<Line>[] => [
     cell: ({ summary }) => (summary ? `${summary.out} of ${summary.readings}` : "–"),
   },
 ];
+
+function Chevron() {
+  return (
+    <svg
+      width="10"
+      height="10"
+      viewBox="0 0 10 10"
+      aria-hidden="true"
+      className="flex-none fill-none stroke-ink-3 group-open:rotate-90"
+    >
+      <path d="M3 1L7 5L3 9" strokeWidth="1.6" />
+    </svg>
+  );
+}
+
+/** How often something was out of tolerance here of late. */
+function outWords(lines: readonly Line[], days: number): string {
+  const out = lines.reduce((sum, line) => sum + (line.summary?.out ?? 0), 0);
+  if (out === 0) return `none out in ${days} days`;
+  return `${out.toLocaleString("en-GB")} ${out === 1 ? "reading" : "readings"} out in ${days} days`;
+}
 
 /** Never 100.0 % where something was out. */
 const floored = (share: number): number => Math.floor(share * 1000 + 1e-9) / 1000;
@@ -106,27 +127,29 @@ export function ChartChooser({ rows, summaries, days, pointCodes, ofOneSystem = 
   if (ofOneSystem) return <Panel>{table(lines, "Charts of this system")}</Panel>;
   const areas = [...new Map(lines.map((line) => [line.areaId, line.areaName]))];
   return (
-    <div className="grid gap-5">
+    <div className="grid grid-cols-[minmax(0,1fr)] gap-5">
       {areas.map(([areaId, areaName]) => {
         const ofArea = lines.filter((line) => line.areaId === areaId);
         const systems = [...new Map(ofArea.map((line) => [line.systemId, line]))];
         return (
           <Panel key={areaId} title={areaName} id={`area-${areaId}`}>
-            <div className="grid gap-1.5">
+            <div className="grid grid-cols-[minmax(0,1fr)] gap-1.5">
               {systems.map(([systemId, first]) => {
                 const ofSystem = ofArea.filter((line) => line.systemId === systemId);
                 const out = ofSystem.filter((line) => line.recent[0]?.status === "out").length;
                 return (
                   <details
                     key={systemId}
-                    className="border-t border-rule pt-1.5"
+                    className="group border-t border-rule pt-1.5"
                     open={out > 0 || systems.length === 1}
                   >
                     <summary className="flex min-h-11 flex-wrap items-center gap-x-3">
+                      <Chevron />
                       <h3>{first.systemCode}</h3>
                       <span className="text-ink-2">{first.systemName}</span>
                       <span className="ml-auto text-sm text-ink-3">
-                        {ofSystem.length === 1 ? "1 chart" : `${ofSystem.length} charts`}
+                        {ofSystem.length === 1 ? "1 chart" : `${ofSystem.length} charts`},{" "}
+                        {outWords(ofSystem, days)}
                       </span>
                       {out > 0 && <StatusWord status="out" detail={`${out} now`} />}
                     </summary>

@@ -3,7 +3,7 @@ import { DateInput, Facts, Field, Notice, Panel, Quantity, TimeText } from "@/li
 import { unitLabel } from "@/lib/units/factors";
 import type { FacilityParameter } from "@/modules/methods/model";
 import type { SeriesReading } from "../series-model";
-import type { SeriesControl } from "./series-chart-data";
+import { MOST_FLAGS, type SeriesControl } from "./series-chart-data";
 
 export interface BaselineDays {
   readonly fromOn: string;
@@ -97,6 +97,18 @@ function BeyondList({
   if (beyond.length === 0) return <p>No reading since the baseline began lies beyond the control limits.</p>;
   const newest = beyond.slice(-NAMED).reverse();
   const rest = beyond.length - newest.length;
+  if (beyond.length > MOST_FLAGS) {
+    return (
+      <p>
+        <b className="font-semibold">
+          {beyond.length.toLocaleString("en-GB")} of {readings.length.toLocaleString("en-GB")} readings lie
+          beyond the control limits:
+        </b>{" "}
+        too many to be marked in the chart, so these lines do not describe this water. Choose a baseline that
+        does, or a shorter period. The table marks them all.
+      </p>
+    );
+  }
   return (
     <div>
       <p className="font-semibold">

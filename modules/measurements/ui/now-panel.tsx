@@ -15,6 +15,8 @@ interface NowPanelProps {
 }
 
 const DAY_MS = 86_400_000;
+/** Longer ago than this, the year is said too. */
+const SAME_YEAR_MS = 300 * DAY_MS;
 
 /** How everything that is read here stands now: the newest value of each on its well strip. */
 export function NowPanel(props: NowPanelProps) {
@@ -26,7 +28,7 @@ export function NowPanel(props: NowPanelProps) {
           <p>A lead says under Setup what is read at each point, how often, and with which instrument.</p>
         </EmptyState>
       ) : (
-        <ul className="border-t border-rule">
+        <ul className="border-t border-rule sm:grid sm:grid-cols-[minmax(8rem,1fr)_auto_8.5rem_8.75rem] sm:gap-x-4">
           {rows.map((row) => (
             <NowRow key={`${row.pointId} ${row.parameter.id}`} row={row} {...props} />
           ))}
@@ -44,7 +46,7 @@ function NowRow({ row, shown, hrefOf, people, zone, now }: NowPanelProps & { row
   const tone = newest && { out: "text-out", implausible: "text-odd" }[newest.status as "out" | "implausible"];
   return (
     <li
-      className={`grid grid-cols-[minmax(0,1fr)_auto] items-center gap-x-4 gap-y-1.5 border-b border-rule py-2.5 sm:grid-cols-[minmax(0,1.25fr)_7rem_9.5rem_minmax(8.5rem,1fr)] ${isShown ? "shadow-[inset_3px_0_0_var(--water)]" : ""} pl-2.5`}
+      className={`grid grid-cols-[minmax(0,1fr)_auto] items-center gap-x-4 gap-y-1.5 border-b border-rule py-2.5 sm:col-span-4 sm:grid-cols-subgrid ${isShown ? "shadow-[inset_3px_0_0_var(--water)]" : ""} pl-2.5`}
     >
       <span className="min-w-0">
         <Link
@@ -63,7 +65,7 @@ function NowRow({ row, shown, hrefOf, people, zone, now }: NowPanelProps & { row
           <span className="text-base font-normal text-ink-3">not read yet</span>
         )}
       </span>
-      <span className="max-sm:col-start-1">{isNumber && <NowStrip row={row} />}</span>
+      <span className="max-sm:col-start-1 max-sm:max-w-44">{isNumber && <NowStrip row={row} />}</span>
       <span className="flex flex-wrap items-baseline gap-x-3 gap-y-0.5 text-[0.9375rem] max-sm:col-start-2 max-sm:justify-end max-sm:text-right sm:flex-col">
         {newest && (
           <>
@@ -73,11 +75,7 @@ function NowRow({ row, shown, hrefOf, people, zone, now }: NowPanelProps & { row
               quietWhenWithin
             />
             <span className="text-sm text-ink-3">
-              <TimeText
-                at={newest.takenAt}
-                zone={zone}
-                show={now - newest.takenAt < DAY_MS ? "time" : "day"}
-              />{" "}
+              <TimeText at={newest.takenAt} zone={zone} show={ageWords(now - newest.takenAt)} />{" "}
               {people.get(newest.takenBy) ?? ""}
             </span>
           </>
@@ -87,12 +85,18 @@ function NowRow({ row, shown, hrefOf, people, zone, now }: NowPanelProps & { row
   );
 }
 
+function ageWords(ms: number): "time" | "weekday" | "day" {
+  if (ms < DAY_MS) return "time";
+  return ms < SAME_YEAR_MS ? "weekday" : "day";
+}
+
 function NowStrip({ row }: { row: WatchRow }) {
   const { parameter, limits, recent } = row;
   const [newest, before] = recent;
   const bounds = limits.state === "in-force" ? limits.bounds : {};
   return (
     <WellStrip
+      fluid
       name={parameter.name}
       unit={unitLabel(parameter.unit)}
       decimals={parameter.decimals}

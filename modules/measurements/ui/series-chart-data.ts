@@ -19,12 +19,16 @@ function kindOf({ isCorrected, qualifier }: SeriesReading): string | undefined {
   return words.length > 0 ? words.join(", ") : undefined;
 }
 
-/** The readings that can be drawn: those with a number. What is beyond a control limit is flagged. */
+/** More squares than this hide the line they stand on. */
+export const MOST_FLAGS = 100;
+
+/** The readings that can be drawn: those with a number. What is beyond a control limit is flagged, unless too much is. */
 export function chartPoints(
   readings: readonly SeriesReading[],
   beyond: readonly BeyondControl[],
 ): ChartPoint[] {
-  const flags = new Map(beyond.map((each) => [each.index, each.side]));
+  const flagged = beyond.length > MOST_FLAGS ? [] : beyond;
+  const flags = new Map(flagged.map((each) => [each.index, each.side]));
   return readings.flatMap((reading, index): ChartPoint[] => {
     if (reading.value === null) return [];
     const kind = kindOf(reading);

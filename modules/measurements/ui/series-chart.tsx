@@ -6,7 +6,7 @@ import type { LineChartHandle } from "@/lib/ui/line-chart";
 import type { ChartMark } from "@/lib/ui/line-chart-model";
 import { unitLabel } from "@/lib/units/factors";
 import type { SeriesFrame, SeriesReading } from "../series-model";
-import { chartBand, chartPoints, type SeriesControl } from "./series-chart-data";
+import { chartBand, chartPoints, MOST_FLAGS, type SeriesControl } from "./series-chart-data";
 
 const LineChart = dynamic(() => import("@/lib/ui/line-chart").then((module) => module.LineChart), {
   ssr: false,
@@ -76,7 +76,7 @@ export function SeriesKey({
           <Shape d="M5 1A4 4 0 1 1 5 9A4 4 0 1 1 5 1Z" /> corrected, or known only as less or more than
         </li>
       )}
-      {control.beyond.length > 0 && (
+      {control.beyond.length > 0 && control.beyond.length <= MOST_FLAGS && (
         <li className="inline-flex items-center gap-1.5">
           <Shape d="M1 1H9V9H1Z" /> beyond a control limit
         </li>

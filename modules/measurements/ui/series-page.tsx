@@ -93,7 +93,7 @@ function SeriesBody(props: SeriesPageProps & { readings: readonly SeriesReading[
   };
   const table = { readings, parameter, control, people, names, zone };
   return (
-    <div className="grid gap-5">
+    <div className="grid grid-cols-[minmax(0,1fr)] gap-5">
       <ChartPanel {...{ frame, readings, control, marks, leftOut, zone, isNumber }} />
       {isNumber && readings.length > 0 && (
         <ControlPanel {...{ control, readings, parameter, days, zone }} onDays={choose} />

@@ -43,24 +43,26 @@ export function SystemVolumeFacts({
   }
   const recordL = { value: record.volumeL, standardUncertainty: record.standardUncertaintyL };
   return (
-    <Facts
-      facts={[
-        {
-          label: <Link href={href}>Volume of record</Link>,
-          value: <VolumeQuantity volumeL={recordL} unit={unit} />,
-          note: (
-            <>
-              {METHOD_WORDS[record.method]}, <TimeText at={record.effectiveFromAt} zone={zone} show="day" />
-            </>
-          ),
-        },
-        {
-          label: "Holds today",
-          value: <VolumeQuantity volumeL={operating} unit={unit} />,
-          note: whyToday(sheet),
-        },
-      ]}
-    />
+    <div className="max-w-[27rem]">
+      <Facts
+        facts={[
+          {
+            label: <Link href={href}>Volume of record</Link>,
+            value: <VolumeQuantity volumeL={recordL} unit={unit} />,
+            note: (
+              <>
+                {METHOD_WORDS[record.method]}, <TimeText at={record.effectiveFromAt} zone={zone} show="day" />
+              </>
+            ),
+          },
+          {
+            label: "Holds today",
+            value: <VolumeQuantity volumeL={operating} unit={unit} />,
+            note: whyToday(sheet),
+          },
+        ]}
+      />
+    </div>
   );
 }
 

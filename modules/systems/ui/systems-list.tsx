@@ -96,7 +96,7 @@ export function SystemsList({ systems, volumeUnit, actions }: SystemsListProps) 
           </p>
         </EmptyState>
       ) : (
-        <div className="grid gap-5">
+        <div className="grid grid-cols-[minmax(0,1fr)] gap-5">
           <Field
             label="Search"
             name="search"
@@ -119,6 +119,7 @@ export function SystemsList({ systems, volumeUnit, actions }: SystemsListProps) 
           {areas.map(([areaId, areaName]) => (
             <Panel key={areaId} title={areaName} id={`area-${areaId}`}>
               <DataTable
+                className="md:[&_table]:table-fixed"
                 caption={`Systems of ${areaName} in walking order`}
                 columns={columns(volumeUnit)}
                 rows={found.filter((system) => system.areaId === areaId)}

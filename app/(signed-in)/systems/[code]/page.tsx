@@ -68,7 +68,7 @@ export default async function SystemPage({ params, searchParams }: Props) {
   return (
     <>
       <SystemHead system={system} incidents={incidents} />
-      <div className="grid items-start gap-5 xl:grid-cols-[minmax(0,7fr)_minmax(0,6fr)]">
+      <div className="grid grid-cols-[minmax(0,1fr)] items-start gap-5 xl:grid-cols-[minmax(0,7fr)_minmax(0,5fr)]">
         <NowPanel
           rows={rows}
           shown={shown && { pointId: shown.pointId, parameterId: shown.parameter.id }}
@@ -77,14 +77,16 @@ export default async function SystemPage({ params, searchParams }: Props) {
           zone={zone}
           now={now}
         />
-        {shown && <ChartBeside row={shown} system={system} incidents={incidents} />}
-        <Readings system={system} before={search.before} people={people} />
-        <div className="grid gap-5">
+        <div className="grid grid-cols-[minmax(0,1fr)] gap-5">
+          {shown && <ChartBeside row={shown} system={system} incidents={incidents} />}
           <SystemIncidents incidents={incidents.slice(0, 8)} people={people} zone={zone} now={now} />
           <EquipmentPanel
             equipment={system.equipment}
             setupHref={may(actor, systemsMay.manageEquipment) ? `/setup/systems/${system.code}` : null}
           />
+        </div>
+        <div className="xl:col-span-2">
+          <Readings system={system} before={search.before} people={people} />
         </div>
       </div>
     </>
@@ -139,7 +141,7 @@ async function SystemHead({
         <Link href={`/systems/${system.code}/charts`}>Charts</Link>
         <Link href={`/setup/limits?system=${encodeURIComponent(system.code)}`}>Limits</Link>
         <Link href={`/systems/${system.code}/volume`}>Volume</Link>
-        {may(actor, auditMay.read) && (
+        {may(actor, auditMay.readRecord) && (
           <Link href={`/history/record/systems_system/${system.id}`}>History of this record</Link>
         )}
       </div>

@@ -54,7 +54,11 @@ export default async function ChartPage({ params, searchParams }: Props) {
     <>
       <PageHead
         title={parameter.name}
-        name={`${system.code} ${system.name}, ${point.name.toLowerCase()}`}
+        name={
+          <>
+            <span className="whitespace-nowrap">{system.code}</span> {system.name}, {point.name.toLowerCase()}
+          </>
+        }
         facts={
           <>
             <Link href={`/systems/${system.code}`}>{system.code}'s page</Link>
