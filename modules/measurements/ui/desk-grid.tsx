@@ -36,8 +36,7 @@ export function DeskGrid({ rows, people, personId, zone }: DeskGridProps) {
   }, [rows, outbox]);
   useSyncExternalStore(desk.subscribe, desk.version, () => 0);
   useEffect(() => outbox.subscribe(desk.touch), [outbox, desk]);
-  useEffect(() => desk.setTaken(taken.taken), [desk, taken.taken?.at, taken.taken?.by, taken.taken === null]);
-
+  useEffect(() => desk.setTaken(taken.taken), [desk, taken.taken]);
   const tell = useLiveMessage();
   const say = useCallback((text: string) => tell({ text }), [tell]);
   const table = useRef<GridTable | null>(null);

@@ -1,9 +1,10 @@
 import { fireEvent, render, screen, waitFor, within } from "@testing-library/react";
 import { beforeEach, describe, expect, it, vi } from "vitest";
+import { systemClock } from "@/lib/clock";
 import { aReading, aWatchRow, HOUR } from "@/tests/support/watch-row";
 import { EntrySheet } from "./entry-sheet";
 
-const NOW = Date.now();
+const NOW = systemClock.now();
 let personId = 100;
 let requests: { path: string; body: { readings?: Record<string, unknown>[] } & Record<string, unknown> }[] =
   [];

@@ -1,7 +1,8 @@
 import { numberText, STATUS_WORDS } from "@/lib/ui";
 import { unitLabel } from "@/lib/units/factors";
 import type { WatchRow } from "../model";
-import type { CellView, GridDesk } from "./grid-desk";
+import type { GridDesk } from "./grid-desk";
+import type { CellView } from "./grid-view";
 
 const STAGE_WORDS: Readonly<Record<CellView["stage"], string>> = {
   empty: "",
@@ -25,6 +26,15 @@ export function cellWords(view: CellView): string {
   else if (need === "block") parts.push("pasted");
   else if (STAGE_WORDS[stage] !== "") parts.push(STAGE_WORDS[stage]);
   return parts.join(" · ");
+}
+
+/** The same in the little room under a value: the status, and a sign for what is due (↵) or done (✓); the words say it in full. */
+function shortWords(view: CellView): string {
+  const { status, need, stage } = view;
+  if (status === null || status === "within" || status === "none") return cellWords(view);
+  const sign =
+    need === "confirm" ? " ↵" : stage === "sent" ? " ✓" : need === "block" ? "" : ` ${STAGE_WORDS[stage]}`;
+  return `${STATUS_WORDS[status]}${sign}`.trim();
 }
 
 /** A signature of all that is painted, to see whether a cell must be painted anew. */
@@ -78,7 +88,7 @@ export function paintCell(desk: GridDesk, view: CellView, headerUnit: string | n
   const words = cellWords(view);
   const said = view.status === "within" && words !== "" ? `within, ${words}` : words;
   box.append(line, part("sr-only", `, ${said}`));
-  const shown = part("desk-words", words);
+  const shown = part("desk-words", shortWords(view));
   shown.ariaHidden = "true";
   shown.title = words;
   box.append(shown);

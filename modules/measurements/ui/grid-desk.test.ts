@@ -20,7 +20,7 @@ const temperature = (pointId: number, more: Parameters<typeof aWatchRow>[0] = {}
 /** A desk over these rows, and what was sent from it. */
 function bench(rows: WatchRow[] = [temperature(1), temperature(2), temperature(3)]) {
   const sent: OutgoingReading[] = [];
-  let fault: unknown = null;
+  let fault: Error | null = null;
   let mustBeConfirmed = false;
   let count = 0;
   const paths: string[] = [];
@@ -51,7 +51,7 @@ function bench(rows: WatchRow[] = [temperature(1), temperature(2), temperature(3
     desk,
     sent,
     paths,
-    fail: (with_: unknown) => (fault = with_),
+    fail: (next: Error | null) => (fault = next),
     askToConfirm: () => (mustBeConfirmed = true),
     values: () => sent.map((each) => each.typedText),
   };

@@ -1,4 +1,3 @@
-import type { Side, Status } from "../model";
 import {
   type CellKey,
   cellKey,
@@ -16,45 +15,15 @@ import {
   undo,
   verdictAt,
 } from "./grid-model";
-import { alsoRead, lastItem, statusOf, type Taken, toParcel } from "./hand-over";
+import { type CellView, emptyView, itemView, type Need } from "./grid-view";
+import { alsoRead, lastItem, type Taken, toParcel } from "./hand-over";
 import { inUnit, shortGround, type TypedVerdict } from "./judge-typed";
-import type { Outbox, OutboxItem, SendStage } from "./outbox";
-
-/** What a person has to do about a cell: confirm, mend, or nothing; "block": it waits until its block is sent. */
-export type Need = "confirm" | "mend" | "block" | null;
-
-/** All that is painted in a cell and said about it. */
-export interface CellView {
-  readonly key: CellKey;
-  /** False where nothing is read: the cell takes nothing. */
-  readonly isRead: boolean;
-  /** True where a value may be typed; a stored value is changed on its own page, with a reason. */
-  readonly isOpen: boolean;
-  readonly text: string;
-  readonly unit: string | null;
-  readonly status: Status | null;
-  readonly side: Side | null;
-  readonly stage: SendStage | "empty" | "draft";
-  readonly need: Need;
-  /** "below 6.5" */
-  readonly ground: string;
-  readonly sentence: string;
-  readonly verdict: TypedVerdict | null;
-  readonly readingId: number | null;
-}
+import type { Outbox } from "./outbox";
 
 /** What became of a value when Enter or Tab was pressed. */
 export type Outcome = "sent" | "waits" | "nothing";
 
 const NO_TIME = "Set when the values were taken first; then press Enter here again.";
-const NOTHING = {
-  status: null,
-  side: null,
-  ground: "",
-  sentence: "",
-  verdict: null,
-  readingId: null,
-} as const;
 
 /** The desk: what stands on the sheet, what becomes of it, and who is told. No React in here, so that a key is painted at once. */
 export class GridDesk {
@@ -102,30 +71,11 @@ export class GridDesk {
   view(key: CellKey): CellView {
     const watched = this.sheet.watch.get(key);
     const draft = this.#state.drafts.get(key);
-    if (!watched)
-      return {
-        ...NOTHING,
-        key,
-        isRead: false,
-        isOpen: false,
-        text: "",
-        unit: null,
-        stage: "empty",
-        need: null,
-      };
+    if (!watched) return emptyView(key, false, null);
     if (draft) return this.#draftView(key, draft);
     const item = this.#reopened.has(key) ? undefined : lastItem(this.#outbox.snapshot().items, key);
     if (item) return itemView(key, item);
-    return {
-      ...NOTHING,
-      key,
-      isRead: true,
-      isOpen: true,
-      text: "",
-      unit: watched.unit,
-      stage: "empty",
-      need: null,
-    };
+    return emptyView(key, true, watched.unit);
   }
 
   #draftView(key: CellKey, draft: Draft): CellView {
@@ -308,26 +258,4 @@ export class GridDesk {
     this.#state = state;
     this.touch();
   }
-}
-
-/** A cell whose value has been handed over. */
-function itemView(key: CellKey, item: OutboxItem): CellView {
-  const { answer, stage, reading } = item;
-  const isConfirmed = item.followers.some((each) => each.path === "confirmation" && each.stage !== "refused");
-  const mustConfirm = stage === "sent" && answer?.mustBeConfirmed === true && !isConfirmed;
-  return {
-    key,
-    isRead: true,
-    isOpen: stage === "refused",
-    text: reading.typedText,
-    unit: reading.typedUnit,
-    status: statusOf(item),
-    side: answer?.side ?? null,
-    stage,
-    need: mustConfirm ? "confirm" : stage === "refused" ? "mend" : null,
-    ground: "",
-    sentence: item.sentence ?? answer?.sentence ?? "",
-    verdict: null,
-    readingId: answer?.readingId ?? null,
-  };
 }

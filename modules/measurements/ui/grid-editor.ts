@@ -22,6 +22,7 @@ export interface EditorParams {
 export class GridEditor implements ICellEditorComp {
   #input!: HTMLInputElement;
   #context!: EditorContext;
+  #own!: PendingEdit;
 
   init(params: ICellEditorParams & EditorParams): void {
     this.#context = params.context as EditorContext;
@@ -41,14 +42,15 @@ export class GridEditor implements ICellEditorComp {
     input.ariaLabel = `${watched?.systemCode ?? ""}, ${watched?.parameter.name ?? ""}`;
     input.addEventListener("input", () => this.#typed(key));
     this.#input = input;
-    this.#context.pending = { key, text, typedOver: begun !== null };
+    this.#own = { key, text, typedOver: begun !== null };
+    this.#context.pending = this.#own;
     this.#typed(key);
   }
 
   #typed(key: string): void {
-    const { desk, pending } = this.#context;
+    const { desk } = this.#context;
     const text = this.#input.value;
-    if (pending?.key === key) pending.text = text;
+    this.#own.text = text;
     const verdict = desk.judge(key, { text, unit: desk.unitAt(key) });
     this.#input.dataset.status = verdict?.state === "judged" ? verdict.verdict.status : "";
   }
@@ -61,6 +63,13 @@ export class GridEditor implements ICellEditorComp {
     this.#input.focus();
     const end = this.#input.value.length;
     this.#input.setSelectionRange(end, end);
+  }
+
+  /** The box closes. What nobody took over by a key (a click elsewhere) is handed over now; before the next key, after the grid has closed it. */
+  destroy(): void {
+    if (this.#context.pending !== this.#own) return;
+    this.#context.pending = null;
+    queueMicrotask(() => this.#context.desk.type(this.#own.key, this.#own.text));
   }
 
   getValue(): string {

@@ -3,7 +3,8 @@ import type { Ref } from "react";
 import { Button, StatusWord } from "@/lib/ui";
 import { unitLabel } from "@/lib/units/factors";
 import type { WatchRow } from "../model";
-import type { CellView, GridDesk } from "./grid-desk";
+import type { GridDesk } from "./grid-desk";
+import type { CellView } from "./grid-view";
 import { placeName } from "./hand-over";
 import { applySlip, slipLabel } from "./judge-typed";
 

@@ -2,24 +2,23 @@ import {
   CellApiModule,
   CellStyleModule,
   ClientSideRowModelModule,
-  type ColDef,
   ColumnApiModule,
   CustomEditorModule,
   createGrid,
   type GridApi,
+  type GridOptions,
   ModuleRegistry,
   RenderApiModule,
   RowApiModule,
   ScrollApiModule,
   type SuppressKeyboardEventParams,
-  themeQuartz,
 } from "ag-grid-community";
-import { unitLabel } from "@/lib/units/factors";
-import { cellSignature, paintCell } from "./grid-cell";
-import type { GridDesk } from "./grid-desk";
-import { type EditorContext, GridEditor } from "./grid-editor";
-import { type GridMove, moveFor } from "./grid-keys";
-import { cellBelow, cellBeside, cellKey, type SheetColumn, type SheetRow } from "./grid-model";
+import { cellSignature } from "./grid-cell";
+import { columnId, columnsOf, keyOf, THEME } from "./grid-columns";
+import type { GridDesk, Outcome } from "./grid-desk";
+import type { EditorContext } from "./grid-editor";
+import { type GridAct, type GridMove, moveFor } from "./grid-keys";
+import { cellBelow, cellBeside, type SheetRow } from "./grid-model";
 import { parseBlock } from "./parse-block";
 
 ModuleRegistry.registerModules([
@@ -32,29 +31,6 @@ ModuleRegistry.registerModules([
   RowApiModule,
   ScrollApiModule,
 ]);
-
-/** Our stone, water and ink; the variables follow the theme of the page. */
-const THEME = themeQuartz.withParams({
-  backgroundColor: "var(--sheet)",
-  foregroundColor: "var(--ink)",
-  textColor: "var(--ink)",
-  accentColor: "var(--water)",
-  borderColor: "var(--rule)",
-  chromeBackgroundColor: "var(--sheet)",
-  headerBackgroundColor: "var(--sheet)",
-  headerTextColor: "var(--ink-2)",
-  headerFontWeight: 600,
-  fontFamily: "var(--font-sans)",
-  headerFontFamily: "var(--font-sans)",
-  fontSize: 15,
-  rowHoverColor: "transparent",
-  oddRowBackgroundColor: "transparent",
-  columnBorder: { color: "var(--rule)" },
-  wrapperBorder: { color: "var(--edge)" },
-  wrapperBorderRadius: 3,
-  cellHorizontalPadding: 8,
-  spacing: 6,
-});
 
 export interface GridTableOptions {
   readonly desk: GridDesk;
@@ -72,214 +48,210 @@ export interface GridTable {
   destroy: () => void;
 }
 
-const columnId = (column: SheetColumn) => `p${column.parameterId}`;
-
-function columnsOf(
-  desk: GridDesk,
-  keyOf: (row: SheetRow, column: SheetColumn) => string,
-): ColDef<SheetRow>[] {
-  const system: ColDef<SheetRow> = {
-    colId: "system",
-    headerName: "System",
-    pinned: "left",
-    width: 148,
-    suppressMovable: true,
-    suppressNavigable: true,
-    cellClass: "desk-head",
-    valueGetter: ({ data }) =>
-      data ? `${data.systemCode}${data.isDefaultPoint ? "" : ` ${data.pointName.toLowerCase()}`}` : "",
-  };
-  const parameters = desk.sheet.columns.map((column): ColDef<SheetRow> => {
-    const unit = unitLabel(column.unit);
-    return {
-      colId: columnId(column),
-      headerName: unit === "" ? column.name : `${column.name}, ${unit}`,
-      wrapHeaderText: true,
-      minWidth: 124,
-      width: 132,
-      suppressMovable: true,
-      sortable: false,
-      valueGetter: ({ data }) => (data ? desk.view(keyOf(data, column)).text : ""),
-      cellRenderer: ({ data }: { data?: SheetRow }) =>
-        data ? paintCell(desk, desk.view(keyOf(data, column)), column.unit) : document.createElement("div"),
-      editable: ({ data }) => data !== undefined && desk.view(keyOf(data, column)).isOpen,
-      cellEditor: GridEditor,
-      cellEditorParams: { keyOf: ({ data }: { data: SheetRow }) => keyOf(data, column) },
-    };
-  });
-  return [system, ...parameters];
-}
+/** More rows scroll under the header; fewer stand whole on the page. */
+const MOST_ROWS_SHOWN = 14;
+/** So many columns are all in the document, so that a screen reader finds them. */
+const MOST_COLUMNS_DRAWN = 24;
 
 /** The sheet on the page: painting, typing, walking about and pasting. Everything that it decides is asked of the desk. */
 export function showGrid(element: HTMLElement, options: GridTableOptions): GridTable {
-  const { desk, nonce, onFocus, say } = options;
-  const { rows, columns } = desk.sheet;
-  const context: EditorContext = { desk, pending: null };
-  const keyOf = (row: SheetRow, column: SheetColumn) => cellKey(row.pointId, column.parameterId);
+  const board = new GridBoard(element, options);
+  return { focus: (row, column) => board.focus(row, column), destroy: () => board.destroy() };
+}
 
-  const api: GridApi<SheetRow> = createGrid<SheetRow>(element, {
-    theme: THEME,
-    ...(nonce === undefined ? {} : { styleNonce: nonce }),
-    context,
-    rowData: [...rows],
-    getRowId: ({ data }) => String(data.pointId),
-    columnDefs: columnsOf(desk, keyOf),
-    defaultColDef: { resizable: true, suppressKeyboardEvent: (params) => onKey(params) },
-    rowHeight: 50,
-    headerHeight: 52,
-    domLayout: rows.length > 14 ? "normal" : "autoHeight",
-    stopEditingWhenCellsLoseFocus: true,
-    suppressScrollOnNewData: true,
-    suppressColumnVirtualisation: columns.length <= 24,
-    onCellEditingStopped: () => takePending(),
-    onCellFocused: ({ rowIndex, column }) => {
-      const at =
-        typeof column === "object" && column !== null
-          ? columns.findIndex((each) => columnId(each) === column.getColId())
-          : -1;
-      onFocus(rowIndex === null || at < 0 ? null : { row: rowIndex, column: at });
-    },
-  });
+class GridBoard {
+  readonly #element: HTMLElement;
+  readonly #options: GridTableOptions;
+  readonly #desk: GridDesk;
+  readonly #context: EditorContext;
+  readonly #api: GridApi<SheetRow>;
+  readonly #painted = new Map<string, string>();
+  readonly #stopListening: () => void;
 
-  const focus = (row: number, column: number) => {
-    const at = columns[column];
-    if (!at) return;
-    api.ensureIndexVisible(row);
-    api.ensureColumnVisible(columnId(at));
-    api.setFocusedCell(row, columnId(at));
-  };
-
-  /** Hands over what is typed in the open cell; answers what became of it. */
-  function takePending() {
-    const { pending } = context;
-    context.pending = null;
-    return pending ? desk.type(pending.key, pending.text) : "nothing";
+  constructor(element: HTMLElement, options: GridTableOptions) {
+    this.#element = element;
+    this.#options = options;
+    this.#desk = options.desk;
+    this.#context = { desk: options.desk, pending: null };
+    this.#api = createGrid<SheetRow>(element, this.#gridOptions());
+    element.addEventListener("paste", this.#onPaste);
+    element.addEventListener("copy", this.#onCopy);
+    this.#stopListening = this.#desk.subscribe(this.#paintChanges);
+    this.#paintChanges();
   }
 
-  function go(move: GridMove, row: number, column: number): boolean {
+  #gridOptions(): GridOptions<SheetRow> {
+    const { nonce, onFocus } = this.#options;
+    const { rows, columns } = this.#desk.sheet;
+    return {
+      theme: THEME,
+      ...(nonce === undefined ? {} : { styleNonce: nonce }),
+      context: this.#context,
+      rowData: [...rows],
+      getRowId: ({ data }) => String(data.pointId),
+      columnDefs: columnsOf(this.#desk),
+      defaultColDef: { resizable: true, suppressKeyboardEvent: this.#onKey },
+      rowHeight: 50,
+      headerHeight: 66,
+      domLayout: rows.length > MOST_ROWS_SHOWN ? "normal" : "autoHeight",
+      stopEditingWhenCellsLoseFocus: true,
+      suppressScrollOnNewData: true,
+      suppressColumnVirtualisation: columns.length <= MOST_COLUMNS_DRAWN,
+      onCellFocused: ({ rowIndex, column }) => {
+        const at = typeof column === "object" && column !== null ? this.#columnAt(column) : -1;
+        onFocus(rowIndex === null || at < 0 ? null : { row: rowIndex, column: at });
+      },
+    };
+  }
+
+  #columnAt(column: { getColId(): string }): number {
+    return this.#desk.sheet.columns.findIndex((each) => columnId(each) === column.getColId());
+  }
+
+  /** Where the cursor stands; null where it is on no parameter's cell. */
+  #here(): { row: number; column: number } | null {
+    const at = this.#api.getFocusedCell();
+    const column = at ? this.#columnAt(at.column) : -1;
+    return at && column >= 0 ? { row: at.rowIndex, column } : null;
+  }
+
+  focus(row: number, column: number): void {
+    const at = this.#desk.sheet.columns[column];
+    if (!at) return;
+    this.#api.ensureIndexVisible(row);
+    this.#api.ensureColumnVisible(columnId(at));
+    this.#api.setFocusedCell(row, columnId(at));
+  }
+
+  /** Hands over what is typed in the open cell; answers what became of it. */
+  #takePending(): Outcome {
+    const { pending } = this.#context;
+    this.#context.pending = null;
+    return pending ? this.#desk.type(pending.key, pending.text) : "nothing";
+  }
+
+  #go(move: GridMove, row: number, column: number): boolean {
+    const { sheet } = this.#desk;
     const next =
       move === "down" || move === "up"
-        ? cellBelow(desk.sheet, row, column, move === "down" ? 1 : -1)
-        : cellBeside(desk.sheet, row, column, move === "right" ? 1 : -1);
-    if (next) focus(...next);
+        ? cellBelow(sheet, row, column, move === "down" ? 1 : -1)
+        : cellBeside(sheet, row, column, move === "right" ? 1 : -1);
+    if (next) this.focus(...next);
     return next !== null;
   }
 
-  function onKey(params: SuppressKeyboardEventParams<SheetRow>): boolean {
+  /** Answers whether the grid shall leave the key alone. */
+  #onKey = (params: SuppressKeyboardEventParams<SheetRow>): boolean => {
     const { event, editing } = params;
     const row = params.node.rowIndex ?? 0;
-    const column = columns.findIndex((each) => columnId(each) === params.column.getColId());
-    const key = desk.keyAt(row, column);
+    const column = this.#columnAt(params.column);
+    const key = this.#desk.keyAt(row, column);
     if (key === null || event.isComposing) return false;
-    const act = moveFor(event, editing, context.pending?.typedOver ?? false);
+    const act = moveFor(event, editing, this.#context.pending?.typedOver ?? false);
     if (act === null) return editing;
     if (act === "native") return false;
-    const handled = () => {
-      event.preventDefault();
-      return true;
-    };
     if (act === "cancel") {
-      context.pending = null;
+      this.#context.pending = null;
       return false;
     }
-    if (editing) {
-      const outcome = takePending();
-      api.stopEditing(true);
-      const stays = act.because === "enter" && outcome === "waits";
-      if (stays || !go(act.move, row, column)) focus(row, column);
-      return handled();
-    }
+    const isOurs = editing ? this.#leaveCell(act, row, column) : this.#carryOut(act, key, row, column);
+    if (isOurs) event.preventDefault();
+    return isOurs;
+  };
+
+  /** Enter, Tab or an arrow while typing. A value that waits keeps the cursor after Enter: the second Enter confirms it. */
+  #leaveCell(act: GridAct, row: number, column: number): boolean {
+    const outcome = this.#takePending();
+    this.#api.stopEditing(true);
+    const stays = act.because === "enter" && outcome === "waits";
+    if (stays || !this.#go(act.move, row, column)) this.focus(row, column);
+    return true;
+  }
+
+  #carryOut(act: GridAct, key: string, row: number, column: number): boolean {
     switch (act.because) {
       case "enter":
-        desk.confirm(key);
-        go(act.move, row, column);
-        return handled();
+        this.#desk.confirm(key);
+        this.#go(act.move, row, column);
+        return true;
       case "tab":
-        return go(act.move, row, column) ? handled() : false;
+        return this.#go(act.move, row, column);
       case "clear":
-        desk.clear(key);
-        return handled();
+        this.#desk.clear(key);
+        return true;
       case "undo":
-        desk.undo();
-        return handled();
+        this.#desk.undo();
+        return true;
       case "redo":
-        desk.redo();
-        return handled();
+        this.#desk.redo();
+        return true;
       case "send-block":
-        say(sentText(desk.sendBlock()));
-        return handled();
+        this.#options.say(sentText(this.#desk.sendBlock()));
+        return true;
       case "leave":
-        options.onLeave();
-        return handled();
+        this.#options.onLeave();
+        return true;
       case "arrow":
         return false;
     }
   }
 
-  const onPaste = (event: ClipboardEvent) => {
+  #onPaste = (event: ClipboardEvent): void => {
+    const { say } = this.#options;
     const text = event.clipboardData?.getData("text/plain") ?? "";
-    const at = api.getFocusedCell();
     const isBlock = /[\t\n\r]/.test(text.replace(/[\r\n]+$/, ""));
-    if (!at || (context.pending && !isBlock)) return;
+    if (this.#context.pending && !isBlock) return;
+    const at = this.#here();
     event.preventDefault();
-    context.pending = null;
-    api.stopEditing(true);
-    const column = columns.findIndex((each) => columnId(each) === at.column.getColId());
+    this.#context.pending = null;
+    this.#api.stopEditing(true);
     const block = parseBlock(text);
-    if (column < 0) return say("Put the cursor on the cell where the block begins, then paste again.");
+    if (!at) return say("Put the cursor on the cell where the block begins, then paste again.");
     if (block === null)
       return say(
         "This is more than a sheet of readings can hold (5,000 cells). Bring it in as a file instead.",
       );
-    const { placed, lost } = desk.paste({ row: at.rowIndex, column }, block);
+    const { placed, lost } = this.#desk.paste(at, block);
     say(pastedText(placed, lost));
-    focus(at.rowIndex, column);
+    this.focus(at.row, at.column);
   };
-  const onCopy = (event: ClipboardEvent) => {
-    const at = api.getFocusedCell();
-    if (!at || context.pending) return;
-    const key = desk.keyAt(
-      at.rowIndex,
-      columns.findIndex((each) => columnId(each) === at.column.getColId()),
-    );
-    if (key === null) return;
-    event.clipboardData?.setData("text/plain", desk.view(key).text);
+
+  #onCopy = (event: ClipboardEvent): void => {
+    const at = this.#here();
+    const key = at && this.#desk.keyAt(at.row, at.column);
+    if (!key || this.#context.pending) return;
+    event.clipboardData?.setData("text/plain", this.#desk.view(key).text);
     event.preventDefault();
   };
-  element.addEventListener("paste", onPaste);
-  element.addEventListener("copy", onCopy);
 
-  const painted = new Map<string, string>();
-  const paintChanges = () => {
-    for (const row of rows) {
-      const changed = columns.filter((column) => {
-        const signature = cellSignature(desk.view(keyOf(row, column)));
-        const isNew = painted.get(keyOf(row, column)) !== signature;
-        if (isNew) painted.set(keyOf(row, column), signature);
-        return isNew;
+  /** Paints the cells that look different from before, in the same breath as the change. */
+  #paintChanges = (): void => {
+    for (const row of this.#desk.sheet.rows) {
+      const changed = this.#desk.sheet.columns.filter((column) => this.#hasChanged(keyOf(row, column)));
+      const node = changed.length > 0 ? this.#api.getRowNode(String(row.pointId)) : undefined;
+      if (!node) continue;
+      this.#api.refreshCells({
+        rowNodes: [node],
+        columns: changed.map(columnId),
+        force: true,
+        suppressFlash: true,
       });
-      const node = changed.length > 0 ? api.getRowNode(String(row.pointId)) : undefined;
-      if (node)
-        api.refreshCells({
-          rowNodes: [node],
-          columns: changed.map(columnId),
-          force: true,
-          suppressFlash: true,
-        });
     }
   };
-  const unsubscribe = desk.subscribe(paintChanges);
-  paintChanges();
 
-  return {
-    focus,
-    destroy: () => {
-      unsubscribe();
-      element.removeEventListener("paste", onPaste);
-      element.removeEventListener("copy", onCopy);
-      api.destroy();
-    },
-  };
+  #hasChanged(key: string): boolean {
+    const signature = cellSignature(this.#desk.view(key));
+    if (this.#painted.get(key) === signature) return false;
+    this.#painted.set(key, signature);
+    return true;
+  }
+
+  destroy(): void {
+    this.#stopListening();
+    this.#element.removeEventListener("paste", this.#onPaste);
+    this.#element.removeEventListener("copy", this.#onCopy);
+    this.#api.destroy();
+  }
 }
 
 function sentText(count: number): string {

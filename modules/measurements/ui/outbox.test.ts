@@ -8,7 +8,7 @@ type Call = { path: string; body: unknown; key: string | undefined };
 function bench(store = new Map<string, string>()) {
   const calls: Call[] = [];
   const timers: { run: () => void; ms: number }[] = [];
-  let behave: () => unknown = () => undefined;
+  let behave: () => Error | undefined = () => undefined;
   const outbox = new Outbox({
     personId: 7,
     now: () => 1000,
@@ -38,7 +38,7 @@ function bench(store = new Map<string, string>()) {
       return { data: { readings: [{ ...answer, mustBeConfirmed: false }] } } as Answer;
     },
   });
-  return { outbox, calls, timers, store, answerWith: (next: () => unknown) => (behave = next) };
+  return { outbox, calls, timers, store, answerWith: (next: () => Error | undefined) => (behave = next) };
 }
 
 const item = (uuid: string) => ({

@@ -1,5 +1,5 @@
 "use client";
-import { useCallback, useState } from "react";
+import { useCallback, useMemo, useState } from "react";
 import { systemClock } from "@/lib/clock";
 import { Button, DateInput, Field, RadioButtons, Select } from "@/lib/ui";
 import type { Taken } from "./hand-over";
@@ -20,7 +20,9 @@ interface TakenState {
 export function useTaken(zone: string) {
   const [state, setState] = useState<TakenState>({ text: "", which: null, by: null });
   const moment: TakenMoment = readTakenAt(state.text, zone, systemClock.now(), state.which);
-  const taken: Taken | null = moment.ok ? { at: moment.at, by: state.by } : null;
+  const usable = moment.ok;
+  const at = moment.ok ? moment.at : null;
+  const taken = useMemo<Taken | null>(() => (usable ? { at, by: state.by } : null), [usable, at, state.by]);
   const change = useCallback((part: Partial<TakenState>) => setState((old) => ({ ...old, ...part })), []);
   return { state, moment, taken, change };
 }

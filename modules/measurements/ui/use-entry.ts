@@ -35,19 +35,22 @@ export interface EntryCell {
   readonly confirmStored: () => void;
 }
 
+function withDraft(drafts: ReadonlyMap<string, EntryDraft>, cell: string, draft: EntryDraft | null) {
+  const next = new Map(drafts);
+  if (draft === null) next.delete(cell);
+  else next.set(cell, draft);
+  return next;
+}
+
 /** The state of an entry sheet: what is typed, what the browser thinks of it, what has been handed over. */
 export function useEntry(personId: number, taken: Taken | null) {
   const { outbox, state } = useOutbox(personId);
   const [drafts, setDrafts] = useState<ReadonlyMap<string, EntryDraft>>(new Map());
 
-  const put = useCallback((cell: string, draft: EntryDraft | null) => {
-    setDrafts((old) => {
-      const next = new Map(old);
-      if (draft === null) next.delete(cell);
-      else next.set(cell, draft);
-      return next;
-    });
-  }, []);
+  const put = useCallback(
+    (cell: string, draft: EntryDraft | null) => setDrafts((old) => withDraft(old, cell, draft)),
+    [],
+  );
 
   const cellOf = (row: WatchRow): EntryCell => {
     const cell = cellKey(row.pointId, row.parameter.id);
