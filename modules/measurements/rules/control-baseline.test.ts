@@ -47,6 +47,10 @@ describe("the baseline of a control chart", () => {
     expect(controlBaseline(zigzag, 0, 40 * DAY)).toMatchObject({
       warning: expect.stringContaining("overstate"),
     });
+    // by hand: r1 of 40 values in turn is −39/40, and √1.975 = 1.405
+    expect(controlBaseline(zigzag, 0, 40 * DAY)).toMatchObject({
+      warning: expect.stringContaining("41 % too far"),
+    });
   });
 });
 

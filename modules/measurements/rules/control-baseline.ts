@@ -63,13 +63,19 @@ export function controlBaseline(readings: readonly ChartedReading[], fromAt: num
   return { ok: true, limits, r1, warning: warningOf(r1, values.length) };
 }
 
+/**
+ * Says by how much dependence moves the lines: the mean moving range of an AR(1) process is (2 / √π) σ √(1 − r1).
+ */
 function warningOf(r1: number, n: number): string | null {
   if (Math.abs(r1) <= 1.96 / Math.sqrt(n)) return null;
   const figure = r1.toFixed(2).replace("-", "−");
+  const ratio = Math.sqrt(1 - r1);
   return r1 > 0
-    ? `Neighbouring readings of the baseline resemble each other (lag-1 autocorrelation ${figure}), so the moving ranges understate the spread: many points beyond these lines mean nothing.`
-    : `Neighbouring readings of the baseline swing against each other (lag-1 autocorrelation ${figure}), so the moving ranges overstate the spread: these lines lie too far apart.`;
+    ? `Neighbouring readings of the baseline resemble each other (lag-1 autocorrelation ${figure}), so moving ranges understate the spread: these lines lie about ${percent(1 - ratio)} % too close to the centre, and points beyond them may mean nothing.`
+    : `Neighbouring readings of the baseline swing against each other (lag-1 autocorrelation ${figure}), so moving ranges overstate the spread: these lines lie about ${percent(ratio - 1)} % too far from the centre.`;
 }
+
+const percent = (share: number): number => Math.round(100 * share);
 
 /** A reading beyond a control limit: its index in the series and which limit. */
 export interface BeyondControl {

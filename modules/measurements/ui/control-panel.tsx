@@ -51,7 +51,7 @@ export function ControlPanel({ control, readings, parameter, days, onDays, zone 
         </div>
         {!baseline.ok && <Notice title="No control limits">{baseline.sentence}</Notice>}
         {baseline.ok && baseline.warning !== null && (
-          <Notice kind="caution" title="these limits mislead">
+          <Notice kind="caution" title="these readings depend on each other">
             {baseline.warning}
           </Notice>
         )}

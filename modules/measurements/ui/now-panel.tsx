@@ -66,7 +66,7 @@ function NowRow({ row, shown, hrefOf, people, zone, now }: NowPanelProps & { row
         )}
       </span>
       <span className="max-sm:col-start-1 max-sm:max-w-44">{isNumber && <NowStrip row={row} />}</span>
-      <span className="flex flex-wrap items-baseline gap-x-3 gap-y-0.5 text-[0.9375rem] max-sm:col-start-2 max-sm:justify-end max-sm:text-right sm:flex-col">
+      <span className="flex flex-col items-start gap-y-0.5 text-[0.9375rem] max-sm:col-start-2 max-sm:items-end max-sm:text-right">
         {newest && (
           <>
             <StatusWord

@@ -1,7 +1,7 @@
 "use client";
 import Link from "next/link";
 import { type ReactNode, useState } from "react";
-import { type DataColumn, DataTable, EmptyState, Field, PageHead, Panel, TextInput } from "@/lib/ui";
+import { type DataColumn, DataTable, EmptyState, PageHead, Panel, TextInput } from "@/lib/ui";
 import {
   type Measured,
   SYSTEM_KIND_WORDS,
@@ -97,19 +97,15 @@ export function SystemsList({ systems, volumeUnit, actions }: SystemsListProps) 
         </EmptyState>
       ) : (
         <div className="grid grid-cols-[minmax(0,1fr)] gap-5">
-          <Field
-            label="Search"
-            name="search"
-            required
-            className="max-w-md"
-            hint="Code, name, area, kind or water"
-          >
+          <label className="block max-w-md">
+            <span className="mb-1 block font-semibold">Search</span>
             <TextInput
               type="search"
+              placeholder="code, name, area, kind or water"
               value={search}
               onChange={(event) => setSearch(event.currentTarget.value)}
             />
-          </Field>
+          </label>
           <p role="status" className="sr-only">
             {found.length} found
           </p>
