@@ -3,6 +3,7 @@ import { openDatabase } from "@/db/database";
 import { SetClock, systemClock } from "@/lib/clock";
 import { settings } from "@/lib/env";
 import { migrateDatabase, useReactions } from "@/modules/audit";
+import { seedImports } from "./imports";
 import { seedLimitStory, seedLimits } from "./limits";
 import { seedChecks, seedMethods } from "./methods";
 import { seedBindings, seedPeople } from "./people";
@@ -38,6 +39,7 @@ async function main(): Promise<void> {
   seedLimitStory(stage);
   seedVolumeStory(stage);
   seedStory(stage);
+  seedImports(stage);
   await stage.play();
   stage.clock.set(now);
   await stage.settle();
