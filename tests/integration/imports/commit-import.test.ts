@@ -1,5 +1,6 @@
 import { beforeAll, describe, expect, it } from "vitest";
 import { writeCsv } from "@/lib/csv";
+import { suspendPerson } from "@/modules/identity";
 import { discardImport, startCommit, withdrawImport } from "@/modules/imports";
 import { recordReadings } from "@/modules/measurements";
 import { NOON, type TestBench, testBench } from "@/tests/support/database";
@@ -66,19 +67,6 @@ describe("a file of readings", () => {
       ["12,5", 12.5],
       ["1,234", 1.234],
     ]);
-  });
-
-  it("becomes visible at one moment: nothing of it counts until all of it is brought in", async () => {
-    const { bench, ada } = benchWithAnalyst();
-    const { id } = await checked(bench, ada, "long.csv", LONG);
-    const seen = new Set<number>();
-    bench.run(ada, startCommit, { importId: id });
-    const watch = setInterval(() => seen.add(inForce(bench).length), 0);
-    await work(bench);
-    clearInterval(watch);
-    seen.add(inForce(bench).length);
-    expect([...seen].sort()).toEqual(seen.size === 1 ? [3] : [0, 3]);
-    expect(detail(bench, ada, id).state).toBe("committed");
   });
 
   it("says before the commit what will be out of tolerance, and the commit confirms it", async () => {
@@ -268,7 +256,6 @@ describe("who may import", () => {
     const olu = bench.person("Olu Penrose", ["lead"]);
     bench.run(ada, startCommit, { importId: id });
     const ends = bench.person("Noor Hale", ["admin"]);
-    const { suspendPerson } = await import("@/modules/identity");
     bench.run(ends, suspendPerson, { personId: ada.personId ?? 0, reason: "Has left." });
     await work(bench);
     expect(detail(bench, olu, id)).toMatchObject({
