@@ -174,6 +174,14 @@ function shapeOf(
 ): LimitShape | null {
   if (draft.kind === "constant") return { kind: "constant", bounds: bounds[0] ?? {} };
   if (draft.kind === "season") {
+    draft.knots.forEach(({ when }, knot) => {
+      if (when.trim() !== "") return;
+      problems.push({
+        knot,
+        fields: ["when"],
+        sentence: `Give day ${knot + 1} as month and day, such as 03-21.`,
+      });
+    });
     return {
       kind: "season",
       knots: draft.knots.map(({ when }, index) => ({ monthDay: when.trim(), bounds: bounds[index] ?? {} })),
@@ -181,7 +189,8 @@ function shapeOf(
   }
   const knots = draft.knots.map((knot, index) => {
     const at = startOfDay(knot, zone);
-    if (at === null) problems.push({ knot: index, fields: ["when"], sentence: "Give the day of this knot." });
+    if (at === null)
+      problems.push({ knot: index, fields: ["when"], sentence: `Give day ${index + 1} of the ramp.` });
     return { at: at ?? 0, bounds: bounds[index] ?? {} };
   });
   return { kind: "ramp", knots };

@@ -1,5 +1,5 @@
 "use client";
-import { useState } from "react";
+import { useRef, useState } from "react";
 import { ApiProblem, Button, FormError, NetworkProblem, Select, sendCommand } from "@/lib/ui";
 import type { FacilityParameter, InstrumentRow, MethodRow } from "@/modules/methods/model";
 import { PARAMETER_GROUP_WORDS, PARAMETER_GROUPS } from "@/modules/methods/model";
@@ -41,12 +41,12 @@ export function WatchEditor(props: WatchEditorProps) {
   const [drafts, setDrafts] = useState(() => items.map(toDraft));
   const [problem, setProblem] = useState<ApiProblem | NetworkProblem | null>(null);
   const [busy, setBusy] = useState(false);
-  const [key] = useState(() => ({ value: "" }));
+  const key = useRef("");
   const faulty = drafts.some((draft) => daysFault(draft) !== null);
 
   const send = async () => {
     if (faulty) return;
-    key.value ||= crypto.randomUUID();
+    key.current ||= crypto.randomUUID();
     setBusy(true);
     setProblem(null);
     try {
@@ -59,12 +59,12 @@ export function WatchEditor(props: WatchEditorProps) {
       };
       await sendCommand(`/api/v1/points/${point.id}/watch`, body, {
         method: "PUT",
-        idempotencyKey: key.value,
+        idempotencyKey: key.current,
       });
       onDone(`What is read at ${point.systemCode} ${point.name} is changed.`);
     } catch (error) {
       if (!(error instanceof ApiProblem || error instanceof NetworkProblem)) throw error;
-      if (error instanceof ApiProblem && error.status < 500) key.value = "";
+      if (error instanceof ApiProblem && error.status < 500) key.current = "";
       setProblem(error);
     } finally {
       setBusy(false);

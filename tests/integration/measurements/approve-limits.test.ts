@@ -1,5 +1,6 @@
 import { eq } from "drizzle-orm";
 import { describe, expect, it } from "vitest";
+import type { z } from "zod";
 import { WORK } from "@/app/_server/reactions";
 import { DAY_MS, HOUR_MS } from "@/lib/clock";
 import { JobRunner, verifyHistory } from "@/modules/audit";
@@ -14,12 +15,15 @@ import {
   recordReadings,
   saveLimitTemplate,
 } from "@/modules/measurements";
+import type { proposeLimitsInput } from "@/modules/measurements/input";
 import type { LimitShape } from "@/modules/measurements/model";
 import { judgement, limitVersion, readingInForce } from "@/modules/measurements/schema";
 import { NOON, testBench } from "../../support/database";
 import { waterFor } from "../../support/water";
 
-const constant = (bounds: object): LimitShape => ({ kind: "constant", bounds });
+type Rows = z.input<typeof proposeLimitsInput>["rows"];
+
+const constant = (bounds: object) => ({ kind: "constant" as const, bounds });
 
 function begin() {
   const bench = testBench(NOON);
@@ -30,10 +34,10 @@ function begin() {
     pointId: water.pointId,
     parameterId: water.temperatureId,
     effectiveFromAt: NOON,
-    shape,
+    shape: structuredClone(shape) as Rows[number]["shape"],
     ...more,
   });
-  const propose = (rows: ReturnType<typeof row>[], by = noor) =>
+  const propose = (rows: Rows, by = noor) =>
     bench.run(by, proposeLimits, { title: "Cooler kelp", reason: "The sea is cooler this year", rows })
       .workbookId;
   const decide = (
@@ -264,7 +268,11 @@ describe("a template of limits", () => {
     const [template] = bench.ask(noor, listLimitTemplates, {});
     const points = [water, ...others].map((each) => each.pointId);
     const rows = points.flatMap((pointId) =>
-      (template?.rows ?? []).map((each) => ({ ...row(each.shape), pointId, parameterId: each.parameterId })),
+      (template?.rows ?? []).map((each) => ({
+        ...row(each.shape as LimitShape),
+        pointId,
+        parameterId: each.parameterId,
+      })),
     );
     expect(rows).toHaveLength(8);
     decide(propose(rows));
