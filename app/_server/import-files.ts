@@ -5,10 +5,11 @@ import { systemClock } from "@/lib/clock";
 import { settings } from "@/lib/env";
 import { Problem } from "@/lib/problem";
 import { diskStore } from "@/lib/storage";
-import { ask } from "@/modules/audit";
+import { ask, mustBeAllowed } from "@/modules/audit";
 import {
   getImport,
   getOriginal,
+  importsMay,
   listStagedRows,
   receiveUpload,
   rejectLine,
@@ -26,6 +27,7 @@ const attachment = (name: string, type: string): Record<string, string> => ({
 
 /** Takes a file as the raw body of the request, its name in `?name=`; streamed to the disk, never held whole. */
 export async function takeUpload({ request, actor, requestId }: Asked): Promise<Response> {
+  mustBeAllowed(actor, importsMay.upload);
   const type = (request.headers.get("content-type") ?? "").toLowerCase();
   if (type.startsWith("multipart/") || type.startsWith("application/json")) {
     throw new Problem(

@@ -83,6 +83,12 @@ export async function refusePage(actor: Actor, permission: Permission): Promise<
   forbidden();
 }
 
+/** Shows the page that says that there is no such record, or none that the actor may see. */
+export async function noSuchRecord(actor: Actor, what: string): Promise<never> {
+  await noteRefusal({ person: actor.personId, what, code: "not-found" });
+  notFound();
+}
+
 /** A page that needs a permission before it asks anything (a form); shows the page that says so where there is none. */
 export async function mustMay(permission: Permission): Promise<Actor> {
   const actor = await pageActor();

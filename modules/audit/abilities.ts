@@ -3,7 +3,7 @@ import { definePermissions } from "@/modules/access";
 export const auditMay = definePermissions("audit", {
   readHistory: {
     says: "read the whole history",
-    roles: { lead: "everywhere", auditor: "everywhere", admin: "everywhere", veterinarian: "everywhere" },
+    roles: { lead: "everywhere", auditor: "everywhere", admin: "everywhere" },
   },
   readRecord: { says: "read the history of one record", roles: "everyone" },
   readHealth: {

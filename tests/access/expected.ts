@@ -1,8 +1,10 @@
 import { MATRIX_ROLES, type MatrixRole, type MatrixRow } from "./matrix.data";
 import { OUTSIDERS, type Outsider, type Visitor } from "./visitors";
 
-const isOutsider = (visitor: Visitor): visitor is Outsider => (OUTSIDERS as readonly string[]).includes(visitor);
-const isRole = (visitor: Visitor): visitor is MatrixRole => (MATRIX_ROLES as readonly string[]).includes(visitor);
+const isOutsider = (visitor: Visitor): visitor is Outsider =>
+  (OUTSIDERS as readonly string[]).includes(visitor);
+const isRole = (visitor: Visitor): visitor is MatrixRole =>
+  (MATRIX_ROLES as readonly string[]).includes(visitor);
 
 /** Whether the matrix lets a visitor in. */
 export function isLetIn({ may }: MatrixRow, visitor: Visitor): boolean {

@@ -16,7 +16,12 @@ export async function importedFile(cookie: string): Promise<{ importId: string; 
   const { data } = (await answer.json()) as { data?: { importId?: number; id?: number; code?: string } };
   const importId = data?.importId ?? data?.id;
   if (importId === undefined) throw new Error(`the file was not taken (${answer.status})`);
-  const shown = await send(cookie, `/api/v1/imports/${importId}`);
-  const { code } = ((await shown.json()) as { data: { code: string } }).data;
-  return { importId: String(importId), importCode: code };
+  for (let tries = 0; tries < 200; tries += 1) {
+    const shown = await send(cookie, `/api/v1/imports/${importId}`);
+    const { code, state } = ((await shown.json()) as { data: { code: string; state: string } }).data;
+    // The file is looked through by a job; the walk begins when that is done.
+    if (state === "checked") return { importId: String(importId), importCode: code };
+    await new Promise((resolve) => setTimeout(resolve, 100));
+  }
+  throw new Error("the file was not looked through within 20 s");
 }

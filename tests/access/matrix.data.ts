@@ -240,7 +240,9 @@ export const ROUTES: Readonly<Record<string, Readonly<Partial<Record<Method, Mat
   "/api/v1/history/csv": { GET: { may: READ_HISTORY } },
   "/api/v1/history/[entryId]": { GET: { may: READ_HISTORY } },
   "/api/v1/history/record": { GET: { may: EVERYONE, search: { table: "table", key: "key" } } },
-  "/api/v1/history/record/at": { GET: { may: EVERYONE, search: { table: "table", key: "key", at: "moment" } } },
+  "/api/v1/history/record/at": {
+    GET: { may: EVERYONE, search: { table: "table", key: "key", at: "moment" } },
+  },
   "/api/v1/history/verification": { GET: { may: VERIFY }, POST: { may: VERIFY } },
   "/api/v1/backups": { GET: { may: READ_HEALTH }, POST: { may: ADMIN } },
   "/api/v1/jobs/[jobId]/retry": { POST: { may: ADMIN } },

@@ -71,7 +71,10 @@ export type Fillings = {
 type Db = Sqlite.Database;
 
 function one(db: Db, sql: string, ...given: unknown[]): string {
-  const row = db.prepare(sql).pluck().get(...given);
+  const row = db
+    .prepare(sql)
+    .pluck()
+    .get(...given);
   if (row === undefined || row === null) throw new Error(`the demonstration has nothing for: ${sql}`);
   return String(row);
 }

@@ -6,7 +6,10 @@ const METHODS = ["GET", "HEAD", "POST", "PUT", "PATCH", "DELETE", "OPTIONS"];
 
 /** The address a file of app/ answers at: route groups left out. */
 export function addressOf(file: string): string {
-  const parts = path.dirname(file).split(path.sep).filter((part) => part !== "." && !/^\(.*\)$/.test(part));
+  const parts = path
+    .dirname(file)
+    .split(path.sep)
+    .filter((part) => part !== "." && !/^\(.*\)$/.test(part));
   return `/${parts.join("/")}`;
 }
 
@@ -24,7 +27,12 @@ export function methodsOf(text: string): string[] {
   }
   for (const [, list = ""] of text.matchAll(/export\s*\{([^}]*)\}/g)) {
     for (const item of list.split(",")) {
-      const name = item.trim().split(/\s+as\s+/).at(-1)?.trim() ?? "";
+      const name =
+        item
+          .trim()
+          .split(/\s+as\s+/)
+          .at(-1)
+          ?.trim() ?? "";
       if (METHODS.includes(name)) found.add(name);
     }
   }

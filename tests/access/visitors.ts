@@ -98,12 +98,17 @@ export async function everyVisitor(): Promise<Cookies> {
   for (const role of MATRIX_ROLES) roles[role] = await cookieOf(role);
   const { admin } = roles;
   const suspended = await newcomer(admin, "Bram Tollard", ["lead"]);
-  await carryOut(admin, `/api/v1/people/${suspended.personId}/suspension`, { reason: "has left the station" });
+  await carryOut(admin, `/api/v1/people/${suspended.personId}/suspension`, {
+    reason: "has left the station",
+  });
   const ended = await newcomer(admin, "Wilma Garth", ["lead"]);
   const stale = ended.jar.header();
   await signOut(ended.jar);
   const roleless = await newcomer(admin, "Hanne Quill", ["lead"]);
-  await carryOut(admin, `/api/v1/people/${roleless.personId}/roles/end`, { role: "lead", reason: "moved on" });
+  await carryOut(admin, `/api/v1/people/${roleless.personId}/roles/end`, {
+    role: "lead",
+    reason: "moved on",
+  });
   return {
     nobody: "",
     "forged cookie": "stillwell-session=eyJhbGciOiJkaXIiLCJlbmMiOiJBMjU2R0NNIn0..AAAA.BBBB.CCCC",

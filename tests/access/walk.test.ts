@@ -1,11 +1,11 @@
 import { afterAll, beforeAll, describe, expect, inject, it } from "vitest";
 import { expectedStatus, isLetIn, type Kind } from "./expected";
+import { importedFile } from "./imported-file";
 import { type MatrixRow, type Method, PAGES, ROUTES } from "./matrix.data";
 import { type Filling, type Fillings, fill, fillingsOf, isOfAnArea, isRecord, kindsIn } from "./records";
 import { pageAddresses, routeMethods } from "./routes";
 import { historyWatch, refusalsInLog } from "./traces";
 import { type Cookies, everyVisitor, send, VISITORS, type Visitor } from "./visitors";
-import { importedFile } from "./imported-file";
 
 /** A field that no schema knows: whoever is let in is told so, and nothing is carried out. */
 const PROBE = { "a field of no form": true };
@@ -42,19 +42,27 @@ function note(response: Response, what: string): void {
 }
 
 /** Asks once and answers what is wrong with the answer; null where it is as expected. */
-async function fault(visitor: Visitor, asked: Asked, filling: Filling, wanted: number, as = ""): Promise<string | null> {
+async function fault(
+  visitor: Visitor,
+  asked: Asked,
+  filling: Filling,
+  wanted: number,
+  as = "",
+): Promise<string | null> {
   const response = await ask(visitor, asked, filling);
   const text = await response.text();
   const who = `${visitor}${as}`;
   const what = `${who}: ${asked.method} ${fill(asked.address, asked.row, filling)}`;
-  if (response.status !== wanted) return `${who} got ${response.status}, not ${wanted}: ${text.slice(0, 200)}`;
+  if (response.status !== wanted)
+    return `${who} got ${response.status}, not ${wanted}: ${text.slice(0, 200)}`;
   const isIn = isLetIn(asked.row, visitor) && wanted !== 403 && wanted !== 404;
   if (!isIn) note(response, what);
   if (wanted === 307 && !isLetIn(asked.row, visitor)) {
     const to = response.headers.get("location") ?? "nowhere";
     if (!/^(?:http:\/\/[^/]+)?\/sign-in(?:\?|$)/.test(to)) return `${who} was sent to ${to}`;
   }
-  const shows = visitor === "aquarist" ? fillings.foreignWords.filter((word) => shown(text, word, filling)) : [];
+  const shows =
+    visitor === "aquarist" ? fillings.foreignWords.filter((word) => shown(text, word, filling)) : [];
   return shows.length > 0 ? `${who} was shown something of another area: ${shows.join(", ")}` : null;
 }
 

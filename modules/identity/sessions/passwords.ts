@@ -3,7 +3,7 @@ import type { Database } from "@/db/database";
 import type { Clock } from "@/lib/clock";
 import { invalidField, Problem } from "@/lib/problem";
 import { type Actor, SYSTEM_ACTOR } from "@/modules/access";
-import { parseInput, runCommand, upkeep } from "@/modules/audit";
+import { mustBeAllowed, parseInput, runCommand, upkeep } from "@/modules/audit";
 import { requestReset } from "../commands/request-reset";
 import { changePassword, setPassword } from "../commands/set-password";
 import { changePasswordInput, requestResetInput, setPasswordInput } from "../input";
@@ -89,6 +89,7 @@ export async function changeOwnPassword(
   actor: Actor,
   raw: unknown,
 ): Promise<void> {
+  mustBeAllowed(actor, changePassword.permission);
   const { current, password } = parseInput(changePasswordInput, raw);
   if (actor.personId === null || !(await confirmPassword(db, clock, actor.personId, current))) {
     throw invalidField("/current", "wrong", "This is not your password.");

@@ -1,4 +1,4 @@
-import { and, asc, desc, eq } from "drizzle-orm";
+import { and, asc, desc, eq, inArray } from "drizzle-orm";
 import { z } from "zod";
 import { notFound } from "@/lib/problem";
 import { defineQuery } from "@/modules/audit";
@@ -21,9 +21,7 @@ export const listLimits = defineQuery({
       .from(limitVersion)
       .innerJoin(limitWorkbook, eq(limitWorkbook.id, limitVersion.workbookId))
       .innerJoin(pointDirectory, eq(pointDirectory.pointId, limitVersion.pointId))
-      .where(
-        and(eq(pointDirectory.systemId, systemId), ctx.inMyAreas(pointDirectory.areaId)),
-      )
+      .where(and(eq(pointDirectory.systemId, systemId), ctx.inMyAreas(pointDirectory.areaId)))
       .orderBy(asc(limitVersion.pointId), asc(limitVersion.parameterId), desc(limitVersion.version))
       .all()
       .map((row) => ({
@@ -34,23 +32,33 @@ export const listLimits = defineQuery({
   },
 });
 
-/** Workbooks of limits by state, newest first. */
+/** Workbooks of limits by state, newest first; those that touch no water that the actor may see are left out. */
 export const listLimitWorkbooks = defineQuery({
   name: "listLimitWorkbooks",
   permission: measurementsMay.read,
   input: z.strictObject({ state: z.enum(["proposed", "approved", "declined"]).optional() }),
   run(ctx, { state }) {
+    const touchingMyAreas = ctx.db
+      .select({ id: limitVersion.workbookId })
+      .from(limitVersion)
+      .innerJoin(pointDirectory, eq(pointDirectory.pointId, limitVersion.pointId))
+      .where(ctx.inMyAreas(pointDirectory.areaId));
     return ctx.db
       .select()
       .from(limitWorkbook)
-      .where(state === undefined ? undefined : eq(limitWorkbook.state, state))
+      .where(
+        and(
+          state === undefined ? undefined : eq(limitWorkbook.state, state),
+          ctx.areaIds === null ? undefined : inArray(limitWorkbook.id, touchingMyAreas),
+        ),
+      )
       .orderBy(desc(limitWorkbook.id))
       .limit(200)
       .all();
   },
 });
 
-/** One workbook with its rows, what was in force before each, and the signatures under it. */
+/** One workbook with its rows of the areas that the actor may see, what was in force before each, and the signatures under it. */
 export const getLimitWorkbook = defineQuery({
   name: "getLimitWorkbook",
   permission: measurementsMay.read,
@@ -58,8 +66,10 @@ export const getLimitWorkbook = defineQuery({
   run(ctx, { workbookId }) {
     const workbook = ctx.db.select().from(limitWorkbook).where(eq(limitWorkbook.id, workbookId)).get();
     if (!workbook) throw notFound("such workbook of limits");
-    const rows = workbookRows(ctx.db, workbookId).map((row) => {
+    const all = workbookRows(ctx.db, workbookId);
+    const rows = all.flatMap((row) => {
       const place = ctx.db.select().from(pointDirectory).where(eq(pointDirectory.pointId, row.pointId)).get();
+      if (ctx.areaIds !== null && !(place && ctx.areaIds.includes(place.areaId))) return [];
       const before = ctx.db
         .select()
         .from(limitVersion)
@@ -73,10 +83,16 @@ export const getLimitWorkbook = defineQuery({
         .orderBy(desc(limitVersion.version))
         .all()
         .find((version) => version.version < row.version);
-      return { ...row, place: place ?? null, before: before ?? null };
+      return [{ ...row, place: place ?? null, before: before ?? null }];
     });
-    const hash = contentHash(workbookRows(ctx.db, workbookId));
-    return { workbook, rows, contentHash: hash, signatures: signaturesUnder(ctx.db, { type: "limit-workbook", id: workbookId }, hash) };
+    if (all.length > 0 && rows.length === 0) throw notFound("such workbook of limits");
+    const hash = contentHash(all);
+    return {
+      workbook,
+      rows,
+      contentHash: hash,
+      signatures: signaturesUnder(ctx.db, { type: "limit-workbook", id: workbookId }, hash),
+    };
   },
 });
 

@@ -2,7 +2,7 @@ import type { Metadata } from "next";
 import { notFound } from "next/navigation";
 import { operationalToday } from "@/app/_server/facility-day";
 import { personNames } from "@/app/_server/names";
-import { askPage, pageActor } from "@/app/_server/session";
+import { askPage, noSuchRecord, pageActor } from "@/app/_server/session";
 import { systemClock } from "@/lib/clock";
 import { settings } from "@/lib/env";
 import { PageHead } from "@/lib/ui";
@@ -29,7 +29,7 @@ export default async function DaySheetPage({ params }: Props) {
   if (!isCalendarDay(day)) notFound();
   const code = decodeURIComponent(areaCode).toLowerCase();
   const area = (await askPage(listAreas, {})).find((each) => each.code.toLowerCase() === code);
-  if (!area) notFound();
+  if (!area) return noSuchRecord(await pageActor(), "area");
   const shown = await askPage(getDaySheet, { areaId: area.id, onDay: day });
   const [actor, names, today] = [await pageActor(), await personNames(), operationalToday()];
   const { sheet, counts, state, newest } = shown;

@@ -1,6 +1,6 @@
 import type { Metadata } from "next";
 import Link from "next/link";
-import { askPage, pageActor, refusePage } from "@/app/_server/session";
+import { askPage, mustMay, refusePage } from "@/app/_server/session";
 import { systemClock } from "@/lib/clock";
 import { settings } from "@/lib/env";
 import { numberText } from "@/lib/ui";
@@ -20,7 +20,7 @@ export async function generateMetadata({ params }: Props): Promise<Metadata> {
 }
 
 export default async function EntryPage({ params }: Props) {
-  const actor = await pageActor();
+  const actor = await mustMay(measurementsMay.record);
   const system = await askPage(getSystem, await params);
   if (actor.personId === null || !mayInArea(actor, measurementsMay.record, system.areaId)) {
     return refusePage(actor, measurementsMay.record);
