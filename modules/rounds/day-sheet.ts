@@ -30,36 +30,71 @@ export function dayLimits(onDay: string): Span {
   return dayBounds(onDay, STILLWELL_ZONE, dayCutMinutes);
 }
 
+type LineRow = Omit<SheetLine, "isConfirmed" | "explanations"> & { confirmedAt: number | null };
+
+const LINE_COLUMNS = {
+  areaId: pointDirectory.areaId,
+  readingId: readingInForce.id,
+  pointId: readingInForce.pointId,
+  parameterId: readingInForce.parameterId,
+  systemCode: pointDirectory.systemCode,
+  pointCode: pointDirectory.pointCode,
+  parameterCode: parameterDirectory.parameterCode,
+  typedText: readingInForce.typedText,
+  typedUnit: readingInForce.typedUnit,
+  value: readingInForce.value,
+  qualifier: readingInForce.qualifier,
+  answer: readingInForce.answer,
+  takenAt: readingInForce.takenAt,
+  enteredAt: readingInForce.enteredAt,
+  takenBy: readingInForce.takenBy,
+  enteredBy: readingInForce.enteredBy,
+  methodId: readingInForce.methodId,
+  instrumentId: readingInForce.instrumentId,
+  note: readingInForce.note,
+  supersedesId: readingInForce.supersedesId,
+  correctionReason: readingInForce.correctionReason,
+  confirmedAt: readingInForce.confirmedAt,
+  status: readingInForce.status,
+  side: readingInForce.side,
+  sentence: readingInForce.sentence,
+};
+
+/** A row as the query gives it, field by field: copying by spread would cost more than the query. */
+function toLine(row: LineRow, explanations: SheetLine["explanations"]): SheetLine {
+  return {
+    readingId: row.readingId,
+    pointId: row.pointId,
+    parameterId: row.parameterId,
+    systemCode: row.systemCode,
+    pointCode: row.pointCode,
+    parameterCode: row.parameterCode,
+    typedText: row.typedText,
+    typedUnit: row.typedUnit,
+    value: row.value,
+    qualifier: row.qualifier,
+    answer: row.answer,
+    takenAt: row.takenAt,
+    enteredAt: row.enteredAt,
+    takenBy: row.takenBy,
+    enteredBy: row.enteredBy,
+    methodId: row.methodId,
+    instrumentId: row.instrumentId,
+    note: row.note,
+    supersedesId: row.supersedesId,
+    correctionReason: row.correctionReason,
+    isConfirmed: row.confirmedAt !== null,
+    status: row.status,
+    side: row.side,
+    sentence: row.sentence,
+    explanations,
+  };
+}
+
 /** The readings in force of some areas in a span, in walking order: one query, whatever the number of days. */
 function linesOf(db: Orm, areaIds: readonly number[], { fromAt, toAt }: Span): Placed[] {
   const rows = db
-    .select({
-      areaId: pointDirectory.areaId,
-      readingId: readingInForce.id,
-      pointId: readingInForce.pointId,
-      parameterId: readingInForce.parameterId,
-      systemCode: pointDirectory.systemCode,
-      pointCode: pointDirectory.pointCode,
-      parameterCode: parameterDirectory.parameterCode,
-      typedText: readingInForce.typedText,
-      typedUnit: readingInForce.typedUnit,
-      value: readingInForce.value,
-      qualifier: readingInForce.qualifier,
-      answer: readingInForce.answer,
-      takenAt: readingInForce.takenAt,
-      enteredAt: readingInForce.enteredAt,
-      takenBy: readingInForce.takenBy,
-      enteredBy: readingInForce.enteredBy,
-      methodId: readingInForce.methodId,
-      instrumentId: readingInForce.instrumentId,
-      note: readingInForce.note,
-      supersedesId: readingInForce.supersedesId,
-      correctionReason: readingInForce.correctionReason,
-      confirmedAt: readingInForce.confirmedAt,
-      status: readingInForce.status,
-      side: readingInForce.side,
-      sentence: readingInForce.sentence,
-    })
+    .select(LINE_COLUMNS)
     .from(readingInForce)
     .innerJoin(pointDirectory, eq(pointDirectory.pointId, readingInForce.pointId))
     .innerJoin(parameterDirectory, eq(parameterDirectory.parameterId, readingInForce.parameterId))
@@ -84,36 +119,9 @@ function linesOf(db: Orm, areaIds: readonly number[], { fromAt, toAt }: Span): P
     db,
     rows.map((row) => row.readingId),
   );
-  // field by field: copying by spread would cost more than the query
   return rows.map((row) => ({
     areaId: row.areaId,
-    line: {
-      readingId: row.readingId,
-      pointId: row.pointId,
-      parameterId: row.parameterId,
-      systemCode: row.systemCode,
-      pointCode: row.pointCode,
-      parameterCode: row.parameterCode,
-      typedText: row.typedText,
-      typedUnit: row.typedUnit,
-      value: row.value,
-      qualifier: row.qualifier,
-      answer: row.answer,
-      takenAt: row.takenAt,
-      enteredAt: row.enteredAt,
-      takenBy: row.takenBy,
-      enteredBy: row.enteredBy,
-      methodId: row.methodId,
-      instrumentId: row.instrumentId,
-      note: row.note,
-      supersedesId: row.supersedesId,
-      correctionReason: row.correctionReason,
-      isConfirmed: row.confirmedAt !== null,
-      status: row.status,
-      side: row.side,
-      sentence: row.sentence,
-      explanations: said.get(row.readingId) ?? [],
-    },
+    line: toLine(row, said.get(row.readingId) ?? []),
   }));
 }
 

@@ -13,6 +13,16 @@ function ofState(state: z.output<typeof listIncidentsInput>["state"]): SQL | und
   return state === "unclosed" ? ne(incident.state, "closed") : eq(incident.state, state);
 }
 
+/** How many readings were joined to each incident. */
+function readingCounts(ctx: QueryContext): Map<number, number> {
+  const rows = ctx.db
+    .select({ incidentId: incidentReading.incidentId, readings: count() })
+    .from(incidentReading)
+    .groupBy(incidentReading.incidentId)
+    .all();
+  return new Map(rows.map((row) => [row.incidentId, row.readings]));
+}
+
 /** Incidents that this person may see, with where they are; in the given order. */
 export function incidentRows(ctx: QueryContext, where: SQL | undefined, limit: number): IncidentRow[] {
   const systems = new Map(listSystems.run(ctx, { includeRetired: true }).map((each) => [each.id, each]));
@@ -31,14 +41,7 @@ export function incidentRows(ctx: QueryContext, where: SQL | undefined, limit: n
     )
     .limit(limit)
     .all();
-  const counts = new Map(
-    ctx.db
-      .select({ incidentId: incidentReading.incidentId, readings: count() })
-      .from(incidentReading)
-      .groupBy(incidentReading.incidentId)
-      .all()
-      .map((row) => [row.incidentId, row.readings]),
-  );
+  const counts = readingCounts(ctx);
   return rows.flatMap(({ quality_incident: row, systems_point_directory: place, ...rest }) => {
     const at = systems.get(row.systemId);
     if (!at) return [];

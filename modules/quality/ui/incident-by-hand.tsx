@@ -1,5 +1,6 @@
 "use client";
 import { useRouter } from "next/navigation";
+import { systemClock } from "@/lib/clock";
 import { Button, Field, FormError, Select, sendCommand, Textarea, TextInput, useProblemForm } from "@/lib/ui";
 import { incidentByHandForm } from "../input";
 import { dueIn, RECHECK_OPTIONS } from "./incident-words";
@@ -15,7 +16,7 @@ export function IncidentByHand({
     schema: incidentByHandForm,
     defaultValues: { systemId: "", title: "", note: "", recheckHours: "" },
     send: async ({ systemId, title, note, recheckHours }, idempotencyKey) => {
-      const body = { systemId, title, note, recheckDueAt: dueIn(recheckHours, Date.now()) };
+      const body = { systemId, title, note, recheckDueAt: dueIn(recheckHours, systemClock.now()) };
       const { data } = await sendCommand<{ data: { incidentId: number } }>("/api/v1/incidents", body, {
         idempotencyKey,
       });

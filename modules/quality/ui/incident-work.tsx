@@ -1,6 +1,7 @@
 "use client";
 import { useRouter } from "next/navigation";
 import { useState } from "react";
+import { systemClock } from "@/lib/clock";
 import {
   Button,
   Field,
@@ -129,7 +130,7 @@ export function CareForms({ incidentId, ownerId, people }: CareFormsProps) {
         className="flex flex-wrap items-end gap-3"
         onSubmit={(event) => {
           event.preventDefault();
-          const recheckDueAt = dueIn(Number(hours), Date.now());
+          const recheckDueAt = dueIn(Number(hours), systemClock.now());
           void act(
             `${path}/recheck-due`,
             { recheckDueAt },

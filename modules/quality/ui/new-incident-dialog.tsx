@@ -1,6 +1,7 @@
 "use client";
 import { useRouter } from "next/navigation";
 import { useId } from "react";
+import { systemClock } from "@/lib/clock";
 import {
   Button,
   Dialog,
@@ -32,7 +33,7 @@ export function NewIncidentDialog({ readingId, proposedTitle, onClose, onDone }:
     schema: newIncidentForm,
     defaultValues: { title: proposedTitle, note: "", recheckHours: "" },
     send: async ({ title, note, recheckHours }, idempotencyKey) => {
-      const body = { readingId, title, note, recheckDueAt: dueIn(recheckHours, Date.now()) };
+      const body = { readingId, title, note, recheckDueAt: dueIn(recheckHours, systemClock.now()) };
       const { data } = await sendCommand<{ data: { code: string } }>("/api/v1/incidents", body, {
         idempotencyKey,
       });
