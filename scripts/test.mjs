@@ -5,6 +5,7 @@ import { existsSync, mkdirSync, readFileSync, rmSync } from "node:fs";
 import path from "node:path";
 import { build } from "./build.mjs";
 import { whenAskedToEnd } from "./ending.mjs";
+import { ensureStrace } from "./ensure-strace.mjs";
 import { ensureBrowser } from "./find-browser.mjs";
 import { ensureInstalled, requireNode, root } from "./installed.mjs";
 import { exitCodeOf } from "./serve.mjs";
@@ -76,6 +77,14 @@ const vitest = (name, projects, needs = []) => ({
   },
 });
 
+const integration = vitest("integration", ["integration"]);
+const runIntegration = integration.run;
+// Without strace the test that counts what reaches the disk fails, and says so.
+integration.run = () => {
+  ensureStrace();
+  return runIntegration();
+};
+
 const browser = {
   name: "browser",
   needs: ["build"],
@@ -100,7 +109,7 @@ const STAGES = [
   yesNo("types", [NEXT, "typegen"], ["node_modules/typescript/bin/tsc", "--noEmit"]),
   vitest("unit", ["unit", "unit-dom"]),
   vitest("published", ["published"]),
-  vitest("integration", ["integration"]),
+  integration,
   vitest("architecture", ["architecture"]),
   { name: "build", run: () => countOne(build() ? 0 : 1) },
   vitest("access", ["access"], ["build"]),

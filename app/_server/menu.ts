@@ -51,6 +51,7 @@ export const MENU: readonly MenuEntry[] = [
     for: "everyone",
     foot: true,
   },
+  { href: "/help", label: "Help", for: "everyone", foot: true },
 ];
 
 /** The entries that an actor sees. */

@@ -49,9 +49,21 @@ function captureTriggers(sqlite: Sqlite, table: string): string[] {
   const on = (what: string, event: string, body: string) =>
     `create trigger ${quote(`history_${what}_${table}`)} ${event} on ${quote(table)} begin ${body}; end`;
   return [
-    on("insert", "after insert", `${CAPTURE_INTO} values (current_entry(), ${name}, ${newKey}, 'insert', null, ${newRow})`),
-    on("update", "after update", `${CAPTURE_INTO} values (current_entry(), ${name}, ${newKey}, 'update', ${oldRow}, ${newRow})`),
-    on("delete", "after delete", `${CAPTURE_INTO} values (current_entry(), ${name}, ${oldKey}, 'delete', ${oldRow}, null)`),
+    on(
+      "insert",
+      "after insert",
+      `${CAPTURE_INTO} values (current_entry(), ${name}, ${newKey}, 'insert', null, ${newRow})`,
+    ),
+    on(
+      "update",
+      "after update",
+      `${CAPTURE_INTO} values (current_entry(), ${name}, ${newKey}, 'update', ${oldRow}, ${newRow})`,
+    ),
+    on(
+      "delete",
+      "after delete",
+      `${CAPTURE_INTO} values (current_entry(), ${name}, ${oldKey}, 'delete', ${oldRow}, null)`,
+    ),
     on(
       "key",
       "before update",
@@ -77,7 +89,9 @@ const GUARDS = [
 
 /** Removes every trigger of the history, so that a migration can rebuild tables; `installCapture` puts them back. */
 export function removeCapture(sqlite: Sqlite): void {
-  const rows = sqlite.prepare("select name from sqlite_master where type = 'trigger' and name like 'history_%'").all();
+  const rows = sqlite
+    .prepare("select name from sqlite_master where type = 'trigger' and name like 'history_%'")
+    .all();
   for (const row of rows as { name: string }[]) sqlite.exec(`drop trigger ${quote(row.name)}`);
 }
 
@@ -93,7 +107,9 @@ export function installCapture(sqlite: Sqlite): void {
 /** SHA-256 of the whole schema, triggers included: a trigger that is gone or altered shows. */
 export function schemaHash(sqlite: Sqlite): string {
   const rows = sqlite
-    .prepare("select type, name, coalesce(sql, '') as sql from sqlite_master where name not like 'sqlite_%' order by type, name")
+    .prepare(
+      "select type, name, coalesce(sql, '') as sql from sqlite_master where name not like 'sqlite_%' order by type, name",
+    )
     .all();
   return createHash("sha256").update(JSON.stringify(rows)).digest("hex");
 }

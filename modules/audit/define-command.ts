@@ -48,8 +48,13 @@ export type Command<S extends z.ZodType = z.ZodType, R = unknown> = {
 };
 
 /** The only way to make something that writes. A command without a permission does not compile. */
-export function defineCommand<S extends z.ZodType, R, P extends Permission>(definition: Definition<S, R, P>): Command<S, R> {
+export function defineCommand<S extends z.ZodType, R, P extends Permission>(
+  definition: Definition<S, R, P>,
+): Command<S, R> {
   const { permission } = definition;
-  invariant(!permission.bounded || definition.areas, `${definition.verb} has a bounded permission and must name its areas`);
+  invariant(
+    !permission.bounded || definition.areas,
+    `${definition.verb} has a bounded permission and must name its areas`,
+  );
   return definition as unknown as Command<S, R>;
 }

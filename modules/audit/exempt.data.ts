@@ -4,7 +4,8 @@ export const EXEMPT_TABLES: Readonly<Record<string, string>> = {
   audit_change: "is the history itself; refuses UPDATE and DELETE",
   audit_idempotency: "holds answers that were already given, to give them again; says nothing new",
   audit_job: "is work in hand; what a job does is an entry of its own",
-  identity_credential: "holds password hashes, which must not be copied; each change is an entry that says so",
+  identity_credential:
+    "holds password hashes, which must not be copied; each change is an entry that says so",
   identity_session: "is touched by every request; beginning and end of a session are entries",
   identity_one_time_link: "holds hashes of secrets that live for hours; making and using one are entries",
   identity_throttle: "counts failed sign-ins for minutes",

@@ -24,7 +24,9 @@ function countRows(sqlite: Sqlite): Map<string, number> {
 
 /** Keeps each captured row as JSON, so that what a migration changed can be told apart afterwards. */
 function keepRows(sqlite: Sqlite): void {
-  sqlite.exec("create temp table row_before (table_name text, row_key text, row text, primary key (table_name, row_key))");
+  sqlite.exec(
+    "create temp table row_before (table_name text, row_key text, row text, primary key (table_name, row_key))",
+  );
   for (const table of capturedTables(sqlite)) {
     const [key, row] = [rowKeySql(sqlite, table, "t"), rowJsonSql(sqlite, table, "t")];
     sqlite.exec(`insert into row_before select '${table}', ${key}, ${row} from "${table}" t`);
@@ -94,8 +96,12 @@ function installCaptureWhere(sqlite: Sqlite): void {
 }
 
 function sealMigration(db: Database, at: number, hashes: { before: string | null; after: string }): void {
-  sealOutsideCommand(db, at, auditEvents.migrated.verb, { schemaBefore: hashes.before, schemaAfter: hashes.after }, () =>
-    captureDifferences(db.writer.sqlite),
+  sealOutsideCommand(
+    db,
+    at,
+    auditEvents.migrated.verb,
+    { schemaBefore: hashes.before, schemaAfter: hashes.after },
+    () => captureDifferences(db.writer.sqlite),
   );
 }
 

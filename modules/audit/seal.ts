@@ -67,8 +67,13 @@ export function chainHead(sqlite: Sqlite): { id: number; hash: string } {
 }
 
 /** Writes the entry that closes a command: counts and hashes its changes onto the chain. */
-export function sealEntry(sqlite: Sqlite, entry: Omit<EntryFields, "changeCount">): { hash: string; changeCount: number } {
-  const counted = sqlite.prepare("select count(*) as n from audit_change where entry_id = ?").get(entry.id) as { n: number };
+export function sealEntry(
+  sqlite: Sqlite,
+  entry: Omit<EntryFields, "changeCount">,
+): { hash: string; changeCount: number } {
+  const counted = sqlite
+    .prepare("select count(*) as n from audit_change where entry_id = ?")
+    .get(entry.id) as { n: number };
   const fields: EntryFields = { ...entry, changeCount: counted.n };
   const changes = sqlite.prepare(SELECT_CHANGES).iterate(entry.id) as IterableIterator<ChangeFields>;
   const hash = entryHash(fields, changes);

@@ -1,10 +1,21 @@
 import type { Sqlite } from "@/db/database";
 import { capturedTables, rowJsonSql, rowKeySql, schemaHash } from "./capture";
 import type { Checkpoint } from "./model";
-import { type ChangeFields, type EntryFields, entryHash, GENESIS_HASH, SELECT_CHANGES, SELECT_ENTRIES } from "./seal";
+import {
+  type ChangeFields,
+  type EntryFields,
+  entryHash,
+  GENESIS_HASH,
+  SELECT_CHANGES,
+  SELECT_ENTRIES,
+} from "./seal";
 
 /** One thing found wrong, as a sentence that names the record. */
-export type Finding = { kind: "chain" | "rows" | "schema" | "checkpoint"; entryId: number | null; sentence: string };
+export type Finding = {
+  kind: "chain" | "rows" | "schema" | "checkpoint";
+  entryId: number | null;
+  sentence: string;
+};
 
 export type Verification = {
   entries: number;
@@ -25,7 +36,12 @@ function checkChain(sqlite: Sqlite, findings: Finding[]): { count: number; head:
     count += 1;
     const changes = changesOf.all(entry.id) as ChangeFields[];
     const problem = entryProblem(entry, hash, previous, changes);
-    if (problem) findings.push({ kind: "chain", entryId: entry.id, sentence: `entry ${entry.id} (${entry.verb}): ${problem}` });
+    if (problem)
+      findings.push({
+        kind: "chain",
+        entryId: entry.id,
+        sentence: `entry ${entry.id} (${entry.verb}): ${problem}`,
+      });
     previous = { id: entry.id, hash };
   }
   const head = count === 0 ? null : { entryId: previous.id, hash: previous.hash };
@@ -40,7 +56,8 @@ function entryProblem(
 ): string | null {
   if (entry.id !== previous.id + 1) return `entries ${previous.id + 1} to ${entry.id - 1} are missing`;
   if (entry.prevHash !== previous.hash) return "it does not follow the entry before it";
-  if (entry.changeCount !== changes.length) return `it had ${entry.changeCount} changes, ${changes.length} are there`;
+  if (entry.changeCount !== changes.length)
+    return `it had ${entry.changeCount} changes, ${changes.length} are there`;
   if (entryHash(entry, changes) !== hash) return "the entry or one of its changes has been altered";
   return null;
 }
@@ -64,7 +81,11 @@ const LATEST =
 
 function checkRows(sqlite: Sqlite, table: string, findings: Finding[]): void {
   const rebuilt = new Map<string, { entryId: number; after: string | null }>();
-  for (const row of sqlite.prepare(LATEST).iterate(table) as IterableIterator<{ rowKey: string; entryId: number; after: string | null }>) {
+  for (const row of sqlite.prepare(LATEST).iterate(table) as IterableIterator<{
+    rowKey: string;
+    entryId: number;
+    after: string | null;
+  }>) {
     rebuilt.set(row.rowKey, { entryId: row.entryId, after: row.after });
   }
   const live = `select ${rowKeySql(sqlite, table, "t")} as rowKey, ${rowJsonSql(sqlite, table, "t")} as row from "${table}" t`;
@@ -72,12 +93,22 @@ function checkRows(sqlite: Sqlite, table: string, findings: Finding[]): void {
     const known = rebuilt.get(row.rowKey);
     rebuilt.delete(row.rowKey);
     if (known?.after === row.row) continue;
-    const what = known?.after ? `differs from its history in ${differingFields(known.after, row.row)}` : "has no history";
-    findings.push({ kind: "rows", entryId: known?.entryId ?? null, sentence: `${table} ${row.rowKey} ${what}` });
+    const what = known?.after
+      ? `differs from its history in ${differingFields(known.after, row.row)}`
+      : "has no history";
+    findings.push({
+      kind: "rows",
+      entryId: known?.entryId ?? null,
+      sentence: `${table} ${row.rowKey} ${what}`,
+    });
   }
   for (const [rowKey, { entryId, after }] of rebuilt) {
     if (after === null) continue;
-    findings.push({ kind: "rows", entryId, sentence: `${table} ${rowKey} is in the history but not in the table` });
+    findings.push({
+      kind: "rows",
+      entryId,
+      sentence: `${table} ${rowKey} is in the history but not in the table`,
+    });
   }
 }
 
@@ -92,7 +123,9 @@ function readFields(json: string): Record<string, unknown> | null {
 function differingFields(before: string, after: string): string {
   const [was, is] = [readFields(before), readFields(after)];
   if (!was || !is) return "a form that cannot be read any more";
-  const names = [...new Set([...Object.keys(was), ...Object.keys(is)])].filter((name) => was[name] !== is[name]);
+  const names = [...new Set([...Object.keys(was), ...Object.keys(is)])].filter(
+    (name) => was[name] !== is[name],
+  );
   return names.length > 0 ? names.join(", ") : "its form";
 }
 

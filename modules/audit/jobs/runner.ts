@@ -101,7 +101,9 @@ export class JobRunner {
     try {
       await this.#perform(job);
       upkeep(this.db, () => {
-        this.db.writer.sqlite.prepare("update audit_job set done_at = ? where id = ?").run(this.clock.now(), job.id);
+        this.db.writer.sqlite
+          .prepare("update audit_job set done_at = ? where id = ?")
+          .run(this.clock.now(), job.id);
       });
     } catch (cause) {
       this.#fail(job, cause);
