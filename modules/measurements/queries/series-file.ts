@@ -7,8 +7,7 @@ import { listPersonNames } from "@/modules/identity";
 import { getParameter, listInstruments, listMethods } from "@/modules/methods";
 import { measurementsMay } from "../abilities";
 import { STATUS_WORDS } from "../model";
-import { getPoint } from "../points";
-import { listSeriesSlice, SLICE, sliceRows } from "./series";
+import { listSeriesSlice, SLICE, sliceRows, visiblePoint } from "./series";
 
 /** A slice of the file, and where the next one begins. */
 export interface SeriesFileSlice {
@@ -30,7 +29,7 @@ function localText(at: number, zone: string): string {
 
 function columnsOf(ctx: QueryContext, pointId: number, parameterId: number): Column[] {
   const zone = settings().STILLWELL_ZONE;
-  const place = getPoint(ctx.db, pointId);
+  const place = visiblePoint(ctx, pointId);
   const parameter = getParameter(ctx.db, parameterId);
   const people = new Map(ask(ctx, listPersonNames, {}).map(({ id, name }) => [id, name]));
   const methods = new Map(

@@ -19,7 +19,8 @@ const LATEST = 8.64e15;
 /** So many readings are handed out at once: small enough that nobody else waits, large enough for few requests. */
 export const SLICE = 8_000;
 
-function visiblePoint(ctx: QueryContext, pointId: number): PointPlace {
+/** Where a point is, for those who may see its area. @throws Problem `not-found` */
+export function visiblePoint(ctx: QueryContext, pointId: number): PointPlace {
   const place = ctx.db.select().from(pointDirectory).where(eq(pointDirectory.pointId, pointId)).get();
   if (!place || (ctx.areaIds !== null && !ctx.areaIds.includes(place.areaId))) throw notFound("such point");
   return place;
