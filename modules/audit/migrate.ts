@@ -1,5 +1,5 @@
 import path from "node:path";
-import { migrate } from "drizzle-orm/better-sqlite3/migrator";
+import { readMigrationFiles } from "drizzle-orm/migrator";
 import type { Database, Sqlite } from "@/db/database";
 import type { Clock } from "@/lib/clock";
 import { invariant } from "@/lib/invariant";
@@ -9,6 +9,7 @@ import { auditEvents } from "./events";
 import { chainHead, sealEntry } from "./seal";
 
 const FOLDER = path.resolve("db/migrations");
+const REMEMBERED = "__drizzle_migrations";
 
 const hasTable = (sqlite: Sqlite, name: string): boolean =>
   sqlite.prepare("select 1 from sqlite_master where type = 'table' and name = ?").get(name) !== undefined;
@@ -62,47 +63,76 @@ function mustKeepChildren(sqlite: Sqlite, before: Map<string, number>): void {
   }
 }
 
+type Pending = ReturnType<typeof readMigrationFiles>;
+
+/** The migrations that this file has not seen; the table that remembers them is the one drizzle-kit's migrator keeps. */
+function pendingMigrations(sqlite: Sqlite, folder: string): Pending {
+  const all = readMigrationFiles({ migrationsFolder: folder });
+  if (!hasTable(sqlite, REMEMBERED)) return all;
+  const row = sqlite.prepare(`select max(created_at) as newest from ${REMEMBERED}`).get();
+  const newest = Number((row as { newest: number | null }).newest ?? 0);
+  return all.filter((migration) => migration.folderMillis > newest);
+}
+
+function apply(sqlite: Sqlite, migrations: Pending): void {
+  sqlite.exec(
+    `create table if not exists ${REMEMBERED} (id SERIAL PRIMARY KEY, hash text NOT NULL, created_at numeric)`,
+  );
+  const remember = sqlite.prepare(`insert into ${REMEMBERED} (hash, created_at) values (?, ?)`);
+  for (const { sql: statements, hash, folderMillis } of migrations) {
+    for (const statement of statements) sqlite.exec(statement);
+    remember.run(hash, folderMillis);
+  }
+}
+
 /**
  * Brings the file to the newest schema, puts the capture triggers back, and seals what changed as an entry of its own with
- * the schema's hash before and after. Foreign keys are off meanwhile (a rebuilt table would take its child rows along) and
- * checked after. Does nothing, and writes nothing, where the schema is up to date.
+ * the schema's hash before and after. All of it is one transaction: a migration that fails, or that loses a row or leaves
+ * one pointing to nothing, leaves the file as it was. Foreign keys are off meanwhile (a rebuilt table would take its child
+ * rows along) and checked before COMMIT. Does nothing, and writes nothing, where schema and triggers are as they should be.
+ * @throws Error naming what went wrong; nothing has changed then
  */
 export function migrateDatabase(db: Database, clock: Clock, folder = FOLDER): { migrated: boolean } {
-  const { sqlite, orm } = db.writer;
+  const { sqlite } = db.writer;
+  const pending = pendingMigrations(sqlite, folder);
+  sqlite.pragma("foreign_keys = OFF");
+  // A table that views speak of can be rebuilt only so.
+  sqlite.pragma("legacy_alter_table = ON");
+  sqlite.exec("drop table if exists temp.row_before");
+  sqlite.exec("begin immediate");
+  try {
+    const migrated = bringUpToDate(db, clock.now(), pending);
+    sqlite.exec("commit");
+    return { migrated };
+  } catch (cause) {
+    if (sqlite.inTransaction) sqlite.exec("rollback");
+    throw cause;
+  } finally {
+    sqlite.pragma("legacy_alter_table = OFF");
+    sqlite.pragma("foreign_keys = ON");
+    sqlite.exec("drop table if exists temp.row_before");
+  }
+}
+
+/** Inside the transaction: the migrations, the triggers, the checks, and the entry that tells of them. */
+function bringUpToDate(db: Database, at: number, pending: Pending): boolean {
+  const { sqlite } = db.writer;
   const before = schemaHash(sqlite);
   const isNew = !hasTable(sqlite, "audit_entry");
-  const counts = isNew ? new Map<string, number>() : countRows(sqlite);
-  sqlite.pragma("foreign_keys = OFF");
-  sqlite.exec("drop table if exists temp.row_before");
-  if (isNew) sqlite.exec("create temp table row_before (table_name text, row_key text, row text)");
-  else keepRows(sqlite);
-  try {
-    removeCapture(sqlite);
-    migrate(orm, { migrationsFolder: folder });
-    mustKeepChildren(sqlite, counts);
-  } finally {
-    installCaptureWhere(sqlite);
-    sqlite.pragma("foreign_keys = ON");
-  }
+  const comparesRows = !isNew && pending.length > 0;
+  const counts = comparesRows ? countRows(sqlite) : new Map<string, number>();
+  if (comparesRows) keepRows(sqlite);
+  removeCapture(sqlite);
+  apply(sqlite, pending);
+  mustKeepChildren(sqlite, counts);
+  installCapture(sqlite);
   const after = schemaHash(sqlite);
-  const migrated = before !== after;
-  if (migrated) sealMigration(db, clock.now(), { before: isNew ? null : before, after });
-  sqlite.exec("drop table if exists temp.row_before");
-  return { migrated };
-}
-
-function installCaptureWhere(sqlite: Sqlite): void {
-  if (hasTable(sqlite, "audit_entry")) installCapture(sqlite);
-}
-
-function sealMigration(db: Database, at: number, hashes: { before: string | null; after: string }): void {
-  sealOutsideCommand(
-    db,
-    at,
-    auditEvents.migrated.verb,
-    { schemaBefore: hashes.before, schemaAfter: hashes.after },
-    () => captureDifferences(db.writer.sqlite),
-  );
+  if (before === after) return false;
+  const payload = { schemaBefore: isNew ? null : before, schemaAfter: after };
+  sealOpenly(db, at, auditEvents.migrated.verb, payload, () => {
+    if (comparesRows) captureDifferences(sqlite);
+  });
+  return true;
 }
 
 /** An entry that no person's command made: a migration or a restore. */
@@ -115,6 +145,24 @@ export function sealOutsideCommand(
 ): void {
   const { sqlite } = db.writer;
   sqlite.exec("begin immediate");
+  try {
+    sealOpenly(db, at, verb, payload, write);
+    sqlite.exec("commit");
+  } catch (cause) {
+    if (sqlite.inTransaction) sqlite.exec("rollback");
+    throw cause;
+  }
+}
+
+/** The same inside a transaction that is open. */
+function sealOpenly(
+  db: Database,
+  at: number,
+  verb: string,
+  payload: Record<string, unknown>,
+  write: () => void,
+): void {
+  const { sqlite } = db.writer;
   try {
     const head = chainHead(sqlite);
     db.writer.openEntry = head.id + 1;
@@ -134,10 +182,6 @@ export function sealOutsideCommand(
       requestId: null,
       prevHash: head.hash,
     });
-    sqlite.exec("commit");
-  } catch (cause) {
-    if (sqlite.inTransaction) sqlite.exec("rollback");
-    throw cause;
   } finally {
     db.writer.openEntry = null;
   }
