@@ -57,10 +57,13 @@ describe("a series by slices", () => {
   it("is not there for somebody of another area", () => {
     const { bench, ada, reef } = begin();
     const elsewhere = { pointId: reef.pointId, parameterId: reef.temperatureId };
-    for (const question of [listSeriesSlice, listSeriesFileSlice, getSeriesFrame]) {
-      expect(() => bench.ask(ada, question, elsewhere)).toThrowError(
-        expect.objectContaining({ code: "not-found" }),
-      );
+    const questions = [
+      () => bench.ask(ada, listSeriesSlice, elsewhere),
+      () => bench.ask(ada, listSeriesFileSlice, elsewhere),
+      () => bench.ask(ada, getSeriesFrame, elsewhere),
+    ];
+    for (const question of questions) {
+      expect(question).toThrowError(expect.objectContaining({ code: "not-found" }));
     }
   });
 
