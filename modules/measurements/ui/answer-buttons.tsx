@@ -31,7 +31,7 @@ export function AnswerButtons({ entry, label, describedBy, onDone }: AnswerButto
           <button
             key={choice.code}
             type="button"
-            className="btn answer-button max-sm:flex-1"
+            className="btn answer-button max-sm:grow"
             data-entry={index === 0 && isOpen ? entry.cell : undefined}
             aria-pressed={isPicked}
             disabled={!isOpen && !isPicked}

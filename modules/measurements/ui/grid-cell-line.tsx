@@ -58,7 +58,7 @@ export function GridCellLine({ desk, cell }: GridCellLineProps) {
         <span className="ml-auto flex items-center gap-1">
           {view.readingId !== null && (
             <LinkButton href={`/readings/${view.readingId}`} variant="quiet" size="small">
-              Look or correct
+              Correct…
             </LinkButton>
           )}
           <Button variant="quiet" size="small" onClick={() => desk.reopen(cell)}>

@@ -40,7 +40,7 @@ export function columnsOf(desk: GridDesk): ColDef<SheetRow>[] {
     width: 148,
     suppressMovable: true,
     suppressNavigable: true,
-    cellClass: "desk-head",
+    cellStyle: { display: "flex", alignItems: "center", fontWeight: 600, lineHeight: 1.2 },
     valueGetter: ({ data }) =>
       data ? `${data.systemCode}${data.isDefaultPoint ? "" : ` ${data.pointName.toLowerCase()}`}` : "",
   };

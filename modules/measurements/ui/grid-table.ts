@@ -48,8 +48,10 @@ export interface GridTable {
   destroy: () => void;
 }
 
-/** More rows scroll under the header; fewer stand whole on the page. */
-const MOST_ROWS_SHOWN = 14;
+const ROW_PX = 50;
+const HEAD_PX = 66;
+/** Room for the bar along the bottom and the frame. */
+const SCROLLBAR_PX = 20;
 /** So many columns are all in the document, so that a screen reader finds them. */
 const MOST_COLUMNS_DRAWN = 24;
 
@@ -73,6 +75,8 @@ class GridBoard {
     this.#options = options;
     this.#desk = options.desk;
     this.#context = { desk: options.desk, pending: null };
+    const heightPx = HEAD_PX + options.desk.sheet.rows.length * ROW_PX + SCROLLBAR_PX;
+    element.style.height = `min(${heightPx}px, max(74vh, 24rem))`;
     this.#api = createGrid<SheetRow>(element, this.#gridOptions());
     element.addEventListener("paste", this.#onPaste);
     element.addEventListener("copy", this.#onCopy);
@@ -91,9 +95,8 @@ class GridBoard {
       getRowId: ({ data }) => String(data.pointId),
       columnDefs: columnsOf(this.#desk),
       defaultColDef: { resizable: true, suppressKeyboardEvent: this.#onKey },
-      rowHeight: 50,
-      headerHeight: 66,
-      domLayout: rows.length > MOST_ROWS_SHOWN ? "normal" : "autoHeight",
+      rowHeight: ROW_PX,
+      headerHeight: HEAD_PX,
       stopEditingWhenCellsLoseFocus: true,
       suppressScrollOnNewData: true,
       suppressColumnVirtualisation: columns.length <= MOST_COLUMNS_DRAWN,
