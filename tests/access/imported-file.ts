@@ -20,7 +20,7 @@ export async function importedFile(cookie: string): Promise<{ importId: string; 
     const shown = await send(cookie, `/api/v1/imports/${importId}`);
     const { code, state } = ((await shown.json()) as { data: { code: string; state: string } }).data;
     // The file is looked through by a job; the walk begins when that is done.
-    if (state === "checked") return { importId: String(importId), importCode: code };
+    if (state !== "uploaded" && state !== "checking") return { importId: String(importId), importCode: code };
     await new Promise((resolve) => setTimeout(resolve, 100));
   }
   throw new Error("the file was not looked through within 20 s");

@@ -31,6 +31,8 @@ export const RECORD_KINDS = [
   "moment",
   "table",
   "token",
+  "helpPage",
+  "formulaPage",
   "authSession",
   "authUnknown",
 ] as const;
@@ -143,6 +145,8 @@ function ofNoPlace(db: Db, more: { importId: string; importCode: string }): Part
     moment: String(Date.UTC(2040, 0, 1)),
     table: "measurements_reading",
     token: "a-link-that-was-never-sent-to-anybody",
+    helpPage: "aquarist",
+    formulaPage: "seawater-density",
     authSession: "session",
     authUnknown: "nothing-of-this-name",
     ...more,
