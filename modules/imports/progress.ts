@@ -57,7 +57,7 @@ export async function resumeCheck(
   checkRun: number,
   at: number,
 ): Promise<ProgressRecord> {
-  const known = findProgress(db.writer.orm, importId);
+  const known = findProgress(db.reader.orm, importId);
   const progress = known?.checkRun === checkRun ? known : nothingYet(importId, checkRun, at);
   const beyond = and(eq(stagedRow.importId, importId), gt(stagedRow.line, progress.lastLine));
   for (;;) {

@@ -16,6 +16,35 @@ function placeholders<const Names extends readonly string[]>(
 
 const named = (name: string) => sql.placeholder(name);
 
+/** Plain values of a series in a span that may stand for a change. */
+function preparePreceding(db: Orm) {
+  return db
+    .select({
+      id: reading.id,
+      takenAt: reading.takenAt,
+      value: reading.value,
+      qualifier: reading.qualifier,
+    })
+    .from(reading)
+    .where(
+      and(
+        eq(reading.pointId, named("pointId")),
+        eq(reading.parameterId, named("parameterId")),
+        between(reading.takenAt, named("fromAt"), named("toAt")),
+        ne(reading.id, named("id")),
+        sql`${reading.voidedAt} is null`,
+        sql`(${reading.deliveryId} is null or ${reading.deliveryId} is ${named("deliveryId")} or exists (
+            select 1 from measurements_delivery d
+            where d.id = ${reading.deliveryId} and d.published_at is not null and d.withdrawn_at is null))`,
+        sql`not exists (select 1 from measurements_reading later where later.supersedes_id = ${reading.id})`,
+        sql`coalesce((select j.status from measurements_judgement j where j.reading_id = ${reading.id}
+            order by j.id desc limit 1), '') <> 'implausible'`,
+      ),
+    )
+    .orderBy(asc(reading.takenAt))
+    .prepare();
+}
+
 /** What is asked. */
 function prepareAsking(db: Orm) {
   return {
@@ -52,31 +81,7 @@ function prepareAsking(db: Orm) {
       .orderBy(desc(judgement.id))
       .limit(1)
       .prepare(),
-    preceding: db
-      .select({
-        id: reading.id,
-        takenAt: reading.takenAt,
-        value: reading.value,
-        qualifier: reading.qualifier,
-      })
-      .from(reading)
-      .where(
-        and(
-          eq(reading.pointId, named("pointId")),
-          eq(reading.parameterId, named("parameterId")),
-          between(reading.takenAt, named("fromAt"), named("toAt")),
-          ne(reading.id, named("id")),
-          sql`${reading.voidedAt} is null`,
-          sql`(${reading.deliveryId} is null or ${reading.deliveryId} is ${named("deliveryId")} or exists (
-            select 1 from measurements_delivery d
-            where d.id = ${reading.deliveryId} and d.published_at is not null and d.withdrawn_at is null))`,
-          sql`not exists (select 1 from measurements_reading later where later.supersedes_id = ${reading.id})`,
-          sql`coalesce((select j.status from measurements_judgement j where j.reading_id = ${reading.id}
-            order by j.id desc limit 1), '') <> 'implausible'`,
-        ),
-      )
-      .orderBy(asc(reading.takenAt))
-      .prepare(),
+    preceding: preparePreceding(db),
   };
 }
 

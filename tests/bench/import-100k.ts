@@ -15,7 +15,7 @@ import type { z } from "zod";
 import { openDatabase } from "@/db/database";
 import { systemClock } from "@/lib/clock";
 import { csvLine } from "@/lib/csv";
-import { readSettings, useSettings } from "@/lib/env";
+import { readSettings, useSettings as takeSettings } from "@/lib/env";
 import { invariant } from "@/lib/invariant";
 import type { Actor } from "@/modules/access";
 import { type Command, JobRunner, migrateDatabase, runCommand, type WorkTable } from "@/modules/audit";
@@ -34,7 +34,7 @@ const MINUTE_MS = 60_000;
 const START = Date.UTC(2024, 0, 1);
 
 const folder = await mkdtemp(path.join(tmpdir(), "import-100k-"));
-useSettings(readSettings({ NODE_ENV: "test", STILLWELL_DATA: folder, LOG_LEVEL: "silent" }));
+takeSettings(readSettings({ NODE_ENV: "test", STILLWELL_DATA: folder, LOG_LEVEL: "silent" }));
 const script = path.resolve("build/reader-process.mjs");
 execFileSync(process.execPath, [path.resolve("scripts/build-reader.mjs"), script]);
 const db = openDatabase(path.join(folder, "stillwell.db"));

@@ -50,7 +50,7 @@ test("an analyst imports a file, sees what was refused, commits it and withdraws
   await page.getByLabel("File of readings").setInputFiles(file);
   await page.waitForURL(/\/imports\/I\d{2}-\d{4}$/);
   const code = page.url().split("/").at(-1) ?? "";
-  await page.getByText("Day first").click();
+  await page.getByRole("radio", { name: /Day first/ }).check();
   await page.getByRole("button", { name: "Check the rows" }).click();
   await expect(page.getByRole("heading", { name: "What was found" })).toBeVisible();
   await expect(page.getByText(/There is no system “NOWHERE-99”/)).toBeVisible();

@@ -50,16 +50,12 @@ const identityOf = (of: OfferedReading): string =>
 
 /** Finds what each reading of a file means, whether it is there already and what status it will have, and keeps it. */
 export class Staging {
-  readonly #statements;
-  readonly #findEqual;
+  #statements: Statements | null = null;
 
   constructor(
     private readonly db: Database,
     private readonly of: StagingOf,
-  ) {
-    this.#statements = prepare(db.writer.orm, of.importId);
-    this.#findEqual = equalFinder(db.writer.orm);
-  }
+  ) {}
 
   /**
    * Stages one slice of rows in one transaction and adds it up in `progress`. `lastLine` is given with the last slice of a
@@ -67,11 +63,12 @@ export class Staging {
    */
   stage(drafts: readonly DraftRow[], progress: ProgressRecord, at: number): ProgressRecord {
     return upkeep(this.db, (orm) => {
+      const statements = (this.#statements ??= prepare(orm, this.of.importId));
       const cache = new IntakeCache(orm);
       const next = { ...progress, statusCounts: { ...progress.statusCounts }, updatedAt: at };
       for (const draft of drafts) {
-        const row = this.#judge(orm, draft, cache, at);
-        this.#statements.insert.run(row);
+        const row = this.#judge(orm, statements, draft, cache, at);
+        statements.insert.run(row);
         next[row.outcome] += 1;
         const status = row.expectedStatus as keyof StatusCounts | null | undefined;
         if (row.outcome === "accepted" && status) next.statusCounts[status] += 1;
@@ -81,7 +78,7 @@ export class Staging {
     });
   }
 
-  #judge(orm: Orm, draft: DraftRow, cache: IntakeCache, at: number): NewRow {
+  #judge(orm: Orm, statements: Statements, draft: DraftRow, cache: IntakeCache, at: number): NewRow {
     const { line, column, texts, candidate } = draft;
     const base = { importId: this.of.importId, line, column, ...NOTHING_FOUND };
     const remarks = candidate?.remarks ?? [];
@@ -98,9 +95,9 @@ export class Staging {
     const { reading, offered } = resolved;
     const identity = identityOf(offered);
     const kept = { ...base, candidate: { texts, remarks, reading }, identity };
-    const duplicate = this.#duplicate(offered, identity);
-    if (duplicate) return { ...kept, outcome: "duplicate", problems: [duplicate] };
-    const verdict = foreseeVerdict(orm, offered, cache, () => this.#alongside(offered));
+    const twin = findDuplicate(statements, offered, identity);
+    if (twin) return { ...kept, outcome: "duplicate", problems: [twin] };
+    const verdict = foreseeVerdict(orm, offered, cache, () => readAlongside(statements, offered));
     return {
       ...kept,
       outcome: "accepted",
@@ -116,30 +113,35 @@ export class Staging {
       expectedSentence: verdict.sentence,
     };
   }
+}
 
-  #duplicate(offered: OfferedReading, identity: string): StagedProblem | null {
-    const known = this.#findEqual(offered);
-    if (known) {
-      const from = known.sourceRef === null ? "" : `, brought in by ${known.sourceRef}`;
-      return duplicate("already-in-force", `This very reading is stored already${from}.`);
-    }
-    const twin = this.#statements.twin.get({ identity });
-    return twin
-      ? duplicate("twice-in-file", `The same reading stands on line ${twin.line} of this file.`)
-      : null;
+/** Why a reading is there already, in force or on an earlier line; or null. */
+function findDuplicate(
+  statements: Statements,
+  offered: OfferedReading,
+  identity: string,
+): StagedProblem | null {
+  const known = statements.findEqual(offered);
+  if (known) {
+    const from = known.sourceRef === null ? "" : `, brought in by ${known.sourceRef}`;
+    return duplicate("already-in-force", `This very reading is stored already${from}.`);
   }
+  const twin = statements.twin.get({ identity });
+  return twin
+    ? duplicate("twice-in-file", `The same reading stands on line ${twin.line} of this file.`)
+    : null;
+}
 
-  /** Readings of this file that would be stored with one, of the 24 h before it. */
-  #alongside({ pointId, parameterId, takenAt }: OfferedReading) {
-    return this.#statements.alongside
-      .all({ pointId, parameterId, from: takenAt - DAY_MS, to: takenAt })
-      .map(({ id, takenAt: earlier, value, qualifier }) => ({
-        id: `staged ${id}`,
-        takenAt: earlier ?? 0,
-        value,
-        qualifier: (qualifier ?? "") as Qualifier,
-      }));
-  }
+/** Readings of this file that would be stored with one, of the 24 h before it. */
+function readAlongside(statements: Statements, { pointId, parameterId, takenAt }: OfferedReading) {
+  return statements.alongside
+    .all({ pointId, parameterId, from: takenAt - DAY_MS, to: takenAt })
+    .map(({ id, takenAt: earlier, value, qualifier }) => ({
+      id: `staged ${id}`,
+      takenAt: earlier ?? 0,
+      value,
+      qualifier: (qualifier ?? "") as Qualifier,
+    }));
 }
 
 const duplicate = (code: "already-in-force" | "twice-in-file", reason: string): StagedProblem => ({
@@ -150,11 +152,12 @@ const duplicate = (code: "already-in-force" | "twice-in-file", reason: string): 
   text: null,
 });
 
+const named = (name: string) => sql.placeholder(name);
+
 /** Statements that are used once a row, prepared once a file. */
 function prepare(orm: Orm, importId: number) {
   const mine = eq(stagedRow.importId, importId);
   const accepted = eq(stagedRow.outcome, "accepted");
-  const named = (name: string) => sql.placeholder(name);
   return {
     twin: orm
       .select({ line: stagedRow.line })
@@ -181,26 +184,33 @@ function prepare(orm: Orm, importId: number) {
       )
       .orderBy(asc(stagedRow.takenAt))
       .prepare(),
-    insert: orm
-      .insert(stagedRow)
-      .values({
-        importId: named("importId"),
-        line: named("line"),
-        column: named("column"),
-        outcome: named("outcome"),
-        candidate: named("candidate"),
-        problems: named("problems"),
-        readingUuid: named("readingUuid"),
-        pointId: named("pointId"),
-        parameterId: named("parameterId"),
-        takenAt: named("takenAt"),
-        value: named("value"),
-        qualifier: named("qualifier"),
-        answer: named("answer"),
-        identity: named("identity"),
-        expectedStatus: named("expectedStatus"),
-        expectedSentence: named("expectedSentence"),
-      })
-      .prepare(),
+    findEqual: equalFinder(orm),
+    insert: prepareInsert(orm),
   };
+}
+
+type Statements = ReturnType<typeof prepare>;
+
+function prepareInsert(orm: Orm) {
+  return orm
+    .insert(stagedRow)
+    .values({
+      importId: named("importId"),
+      line: named("line"),
+      column: named("column"),
+      outcome: named("outcome"),
+      candidate: named("candidate"),
+      problems: named("problems"),
+      readingUuid: named("readingUuid"),
+      pointId: named("pointId"),
+      parameterId: named("parameterId"),
+      takenAt: named("takenAt"),
+      value: named("value"),
+      qualifier: named("qualifier"),
+      answer: named("answer"),
+      identity: named("identity"),
+      expectedStatus: named("expectedStatus"),
+      expectedSentence: named("expectedSentence"),
+    })
+    .prepare();
 }

@@ -1,7 +1,7 @@
 "use client";
 import { DataTable, Field, Select, useAct } from "@/lib/ui";
 import type { ImportDetail, MappedColumn } from "../model";
-import { useWords } from "./import-words";
+import { columnWords } from "./import-words";
 
 const ENCODINGS = {
   "utf-8": "UTF-8",
@@ -77,7 +77,7 @@ export function ColumnMapPanel({ detail, mayAnswer }: { detail: ImportDetail; ma
             id: "use",
             head: "Read as",
             cell: ({ use }) => (
-              <span className={use.kind === "unknown" ? "text-ink-3" : undefined}>{useWords(use)}</span>
+              <span className={use.kind === "unknown" ? "text-ink-3" : undefined}>{columnWords(use)}</span>
             ),
           },
         ]}

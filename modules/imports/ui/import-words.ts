@@ -16,7 +16,7 @@ export const FIELD_WORDS: Readonly<Record<ImportField, string>> = {
   takenBy: "taken by",
 };
 
-export function useWords(use: ColumnUse): string {
+export function columnWords(use: ColumnUse): string {
   if (use.kind === "unknown") return "not read";
   if (use.kind === "field") return FIELD_WORDS[use.field];
   return use.unit === null ? `values of ${use.parameter}` : `values of ${use.parameter} in ${use.unit}`;

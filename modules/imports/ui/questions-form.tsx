@@ -88,7 +88,7 @@ function Question({ question, value, error, onSay }: QuestionProps) {
           value: choice.answer,
           label: (
             <>
-              {choice.label}: <b className="num font-semibold">{choice.reading}</b>
+              {choice.label}: <b className="font-semibold tabular-nums">{choice.reading}</b>
             </>
           ),
         }))}

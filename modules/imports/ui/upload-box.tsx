@@ -93,8 +93,8 @@ export function UploadBox({ maxMb }: { maxMb: number }) {
               ? `Sending ${sending.name}`
               : `${sending.name} has arrived; looking at it`
           }
-          done={Math.round(sending.sent / KB)}
-          total={Math.max(1, Math.round(sending.total / KB))}
+          done={Math.ceil(sending.sent / KB)}
+          total={Math.max(1, Math.ceil(sending.total / KB))}
           noun="KB"
         />
       )}
@@ -103,7 +103,8 @@ export function UploadBox({ maxMb }: { maxMb: number }) {
 }
 
 /** The sentence alone: the file is no field to which an error could lead. */
-function strip(problem: ApiProblem | NetworkProblem): Error {
-  const plain = new Error(problem.message);
-  return plain;
+function strip(problem: ApiProblem | NetworkProblem): ApiProblem | NetworkProblem {
+  if (problem instanceof NetworkProblem) return problem;
+  const { title, status, message: detail } = problem;
+  return new ApiProblem({ type: "about:blank", title, status, detail });
 }
