@@ -22,6 +22,10 @@ function decoded(part: string): string {
 
 const isNumber = (part: string): boolean => /^\d+$/.test(part);
 
+/** Parts of an address that are no page of their own: numbers, and the table within the history of a record. */
+const hasNoPage = (parts: readonly string[], index: number): boolean =>
+  isNumber(parts[index] ?? "") || (parts[0] === "history" && parts[1] === "record" && index > 0);
+
 function wordsOf(part: string, href: string, entries: readonly { href: string; label: string }[]): string {
   const entry = entries.find((one) => one.href === href);
   if (entry) return entry.label;
@@ -41,7 +45,7 @@ function wordsOf(part: string, href: string, entries: readonly { href: string; l
 export function pathCrumbs(path: string, entries: readonly { href: string; label: string }[]): Crumb[] {
   const parts = path.split("/").filter(Boolean);
   const crumbs = parts.flatMap((part, index) => {
-    if (isNumber(part)) return [];
+    if (hasNoPage(parts, index)) return [];
     const href = `/${parts.slice(0, index + 1).join("/")}`;
     return [{ label: wordsOf(part, href, entries), href }];
   });

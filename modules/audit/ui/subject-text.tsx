@@ -9,7 +9,7 @@ export interface SubjectTextProps {
 
 /** What an entry is about, leading to that record's own history where it is a record. */
 export function SubjectText({ type, id, words }: SubjectTextProps) {
-  if (type === null) return <span className="text-ink-3">no one record</span>;
+  if (type === null) return <span className="text-ink-3">several records or none</span>;
   if (id === null) return <>{subjectWord(type)}</>;
   const table = words.subjects[type];
   const name = (table && words.names[`${table}/${id}`]) ?? id;

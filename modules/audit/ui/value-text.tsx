@@ -27,12 +27,14 @@ export function ValueText({ name, value, words }: ValueTextProps) {
       return <ReferenceText name={name} value={String(value)} words={words} />;
     case "data":
       return (
-        <pre className="max-w-full font-mono text-sm whitespace-pre-wrap break-words">
+        <pre className="max-w-full font-mono text-sm whitespace-pre-wrap [overflow-wrap:anywhere]">
           {prettyJson(value)}
         </pre>
       );
     case "plain":
-      return <span className="break-words">{value === "" ? "“” (no text)" : String(value)}</span>;
+      return (
+        <span className="[overflow-wrap:anywhere]">{value === "" ? "“” (no text)" : String(value)}</span>
+      );
   }
 }
 
