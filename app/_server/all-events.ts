@@ -2,6 +2,7 @@ import "server-only";
 import { auditEvents } from "@/modules/audit";
 import type { EventKind } from "@/modules/audit/model";
 import { identityEvents } from "@/modules/identity";
+import { importsEvents } from "@/modules/imports";
 import { measurementsEvents } from "@/modules/measurements";
 import { methodsEvents } from "@/modules/methods";
 import { qualityEvents } from "@/modules/quality";
@@ -13,6 +14,7 @@ import { systemsEvents } from "@/modules/systems";
 export const EVENT_TABLES: readonly { title: string; events: Readonly<Record<string, EventKind>> }[] = [
   { title: "Readings and limits", events: measurementsEvents },
   { title: "Rounds and the review of the day", events: roundsEvents },
+  { title: "Imports", events: importsEvents },
   { title: "Incidents", events: qualityEvents },
   { title: "Areas and systems", events: systemsEvents },
   { title: "Parameters, methods and instruments", events: methodsEvents },

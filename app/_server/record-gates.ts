@@ -1,5 +1,6 @@
 import "server-only";
 import type { RecordGates } from "@/modules/audit";
+import { importsMay } from "@/modules/imports";
 import { measurementsMay } from "@/modules/measurements";
 import { methodsMay } from "@/modules/methods";
 import { qualityMay } from "@/modules/quality";
@@ -33,6 +34,8 @@ export const RECORD_GATES: RecordGates = {
   measurements_limit_version: { may: seeReadings, area: ofPoint },
   measurements_limit_workbook: { may: seeReadings },
   measurements_limit_template: { may: seeReadings },
+  imports_import: { may: importsMay.read },
+  imports_file: { may: importsMay.read },
   methods_parameter: { may: methodsMay.read },
   methods_method: { may: methodsMay.read },
   methods_instrument: { may: methodsMay.read },
