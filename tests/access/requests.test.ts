@@ -213,11 +213,12 @@ describe("a page is refused by itself, whatever is said in the name of the proxy
     const [words, letters] = [fillings.foreignWords, "@corran-sound.example"];
     for (const [address, row] of GUARDED) {
       const where = fill(address, row, fillings.own);
-      for (const more of [
+      const ways: Record<string, string>[] = [
         {},
         { "next-router-prefetch": "1" },
         { "next-router-state-tree": frameOf(where) },
-      ]) {
+      ];
+      for (const more of ways) {
         for (const cookie of isLetIn(row, "reader") ? [""] : ["", cookies.reader]) {
           const headers: Record<string, string> = { rsc: "1", ...more };
           const first = await send(cookie, where, { headers });
@@ -230,6 +231,13 @@ describe("a page is refused by itself, whatever is said in the name of the proxy
         }
       }
     }
+    // What is looked for is found by somebody who is let in, asked in the same way.
+    const rsc: Record<string, string> = { rsc: "1" };
+    const first = await send(cookies.lead, "/setup/people", { headers: rsc });
+    const shown = await send(cookies.lead, first.headers.get("location") ?? "/setup/people", {
+      headers: rsc,
+    });
+    expect(await shown.text()).toContain(letters);
     expect(wrong).toEqual([]);
   });
 

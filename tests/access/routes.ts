@@ -19,8 +19,12 @@ function filesNamed(name: RegExp): string[] {
     .sort();
 }
 
-/** The methods that the text of a route file exports, in whichever way it is written. */
+/**
+ * The methods that the text of a route file exports, in whichever way it is written.
+ * @throws Error where they cannot be told from the text, so that none is overlooked
+ */
 export function methodsOf(text: string): string[] {
+  if (/export\s*\*|export\s+const\s*[{[]/.test(text)) throw new Error("write a route's methods out by name");
   const found = new Set<string>();
   for (const [, name] of text.matchAll(/export\s+(?:const|let|var|(?:async\s+)?function)\s+(\w+)/g)) {
     if (name !== undefined && METHODS.includes(name)) found.add(name);
@@ -36,6 +40,7 @@ export function methodsOf(text: string): string[] {
       if (METHODS.includes(name)) found.add(name);
     }
   }
+  if (found.size === 0) throw new Error("a route without a method");
   return [...found].sort();
 }
 

@@ -3,7 +3,7 @@ import { expectedStatus, isLetIn, type Kind } from "./expected";
 import { importedFile } from "./imported-file";
 import { MATRIX_ROLES, type MatrixRow, type Method, PAGES, ROUTES } from "./matrix.data";
 import { type Filling, type Fillings, fill, fillingsOf, isOfAnArea, isRecord, kindsIn } from "./records";
-import { pageAddresses, routeMethods } from "./routes";
+import { addressOf, methodsOf, pageAddresses, routeMethods } from "./routes";
 import { historyWatch, refusalsInLog } from "./traces";
 import { type Cookies, everyVisitor, send, VISITORS, type Visitor } from "./visitors";
 
@@ -96,6 +96,25 @@ async function mustBeAsExpected(asked: Asked): Promise<void> {
   expect(faults.filter((each) => each !== null)).toEqual([]);
   expect(history.since(before)).toEqual([]);
 }
+
+describe("the walk", () => {
+  it("finds the methods of a route however they are exported, and passes over none", () => {
+    expect(methodsOf("export const GET = query(a);\nexport const POST = command(b);")).toEqual([
+      "GET",
+      "POST",
+    ]);
+    expect(methodsOf("export async function DELETE() {}")).toEqual(["DELETE"]);
+    expect(methodsOf("export { handle as GET, handle as PUT };")).toEqual(["GET", "PUT"]);
+    expect(() => methodsOf('export * from "./elsewhere";')).toThrow("by name");
+    expect(() => methodsOf("export const { GET, POST } = both;")).toThrow("by name");
+    expect(() => methodsOf("const GET = 1;")).toThrow("without a method");
+  });
+
+  it("knows an address by its file, groups left out", () => {
+    expect(addressOf("(signed-in)/systems/[code]/page.tsx")).toBe("/systems/[code]");
+    expect(addressOf("page.tsx")).toBe("/");
+  });
+});
 
 describe("the matrix", () => {
   it("has a row for every page, and no other", () => {
