@@ -121,7 +121,7 @@ export default defineConfig([
   },
   {
     name: "stillwell/default exports where a framework asks for them",
-    files: [...CONFIGS, "tests/browser/global-setup.ts"],
+    files: [...CONFIGS, "tests/browser/global-setup.ts", "tests/bench/bare-app/**"],
     rules: { "no-restricted-syntax": "off" },
   },
   {
@@ -131,7 +131,8 @@ export default defineConfig([
   },
   {
     name: "stillwell/where settings are read",
-    files: ["lib/env.ts", "lib/env.test.ts", "scripts/**", "tests/**", ...CONFIGS],
+    // The framework itself says in NEXT_RUNTIME where instrumentation.ts runs, and reads it while it bundles.
+    files: ["lib/env.ts", "lib/env.test.ts", "instrumentation.ts", "scripts/**", "tests/**", ...CONFIGS],
     rules: { "no-restricted-properties": "off", "no-restricted-imports": "off" },
   },
   {

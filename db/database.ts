@@ -75,7 +75,10 @@ export function assertDurable(sqlite: Sqlite): void {
   const level = Number(sqlite.pragma("synchronous", { simple: true }));
   invariant(level === SYNCHRONOUS_FULL, `synchronous is ${level}, not FULL: a power cut could lose commits`);
   invariant(Number(sqlite.pragma("foreign_keys", { simple: true })) === 1, "foreign keys are off");
-  invariant(Number(sqlite.pragma("recursive_triggers", { simple: true })) === 1, "recursive triggers are off");
+  invariant(
+    Number(sqlite.pragma("recursive_triggers", { simple: true })) === 1,
+    "recursive triggers are off",
+  );
 }
 
 /** The database of this process, opened at the first use (a build loads route files without one). */

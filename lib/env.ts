@@ -43,6 +43,8 @@ const settingsSchema = z.object({
   SMTP_SECURE: flag.default(false),
   IMPORT_MAX_MB: z.coerce.number().int().min(1).max(200).default(200),
   LOG_LEVEL: z.enum(["fatal", "error", "warn", "info", "debug", "silent"]).default("info"),
+  /** The moment that the demonstration is made for; now where it is left out. */
+  STILLWELL_SEED_AT: z.coerce.number().int().positive().optional(),
   STILLWELL_JOBS: flag.default(true),
 });
 

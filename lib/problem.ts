@@ -7,15 +7,15 @@ export const PROBLEMS = {
   "wrong-origin": { status: 403, title: "The request came from another site" },
   "not-found": { status: 404, title: "There is no such record" },
   "method-not-allowed": { status: 405, title: "This address does not take that kind of request" },
-  "conflict": { status: 409, title: "The record has changed or does not allow this now" },
+  conflict: { status: 409, title: "The record has changed or does not allow this now" },
   "key-reused": { status: 409, title: "The same key was sent with different content" },
   "needs-confirmation": { status: 409, title: "A person must confirm this first" },
   "too-large": { status: 413, title: "The upload is larger than is allowed" },
   "wrong-type": { status: 415, title: "The content is not of a kind that can be read here" },
-  "invalid": { status: 422, title: "Some of what was sent cannot be used" },
+  invalid: { status: 422, title: "Some of what was sent cannot be used" },
   "wrong-password": { status: 422, title: "The password is not right" },
   "too-many": { status: 429, title: "Too many tries" },
-  "unavailable": { status: 503, title: "The server cannot do this at the moment" },
+  unavailable: { status: 503, title: "The server cannot do this at the moment" },
 } as const;
 
 export type ProblemCode = keyof typeof PROBLEMS;

@@ -19,9 +19,9 @@ import { seedSystems, seedVolumeStory } from "./systems";
  * milliseconds) sets another "now".
  */
 async function main(): Promise<void> {
-  const { databaseFile } = settings();
+  const { databaseFile, STILLWELL_SEED_AT } = settings();
   const began = systemClock.now();
-  const now = Number(process.env.STILLWELL_SEED_AT ?? began);
+  const now = STILLWELL_SEED_AT ?? began;
   const db = openDatabase(databaseFile);
   useReactions(REACTIONS);
   const stage = new Stage(db, now, WORK);

@@ -54,4 +54,3 @@ export const SYSTEM_ACTOR: Actor = {
   areaIds: null,
   sessionId: null,
 };
-

@@ -31,5 +31,7 @@ export function definePermissions<const Table extends Record<string, PermissionR
     };
     return [name, permission];
   });
-  return Object.fromEntries(entries) as { readonly [Name in keyof Table]: Permission<IsBounded<Table[Name]>> };
+  return Object.fromEntries(entries) as {
+    readonly [Name in keyof Table]: Permission<IsBounded<Table[Name]>>;
+  };
 }

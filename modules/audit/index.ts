@@ -16,7 +16,7 @@ export {
 } from "./define-command";
 export { ask, defineQuery, type Query, type QueryContext } from "./define-query";
 export { auditEvents } from "./events";
-export { insertJob, type Reaction, type ReactionTable, useReactions } from "./jobs/queue";
+export { insertJob, type Reaction, type ReactionTable, scheduleOnce, useReactions } from "./jobs/queue";
 export { defineTask, JobRunner, type Task, type WorkTable } from "./jobs/runner";
 export { migrateDatabase, sealOutsideCommand } from "./migrate";
 export { mustBeAllowed } from "./must-be-allowed";

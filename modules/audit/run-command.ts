@@ -158,20 +158,21 @@ function carryOut<S extends z.ZodType, R>(
   const { result, event } = command.run(ctx, input);
   for (const job of jobsFor(event)) insertJob(sqlite, job.verb, job.input, entryId, at, at);
   seal(db, actor, event, at, ctx.requestId);
+  const answer: Answer<R> = { result, entryId, replayed: false };
   if (options.idempotencyKey) {
-    sqlite
-      .prepare(
-        "insert into audit_idempotency (key, actor_id, command, input_hash, answer, entry_id, at) values (?, ?, ?, ?, ?, ?, ?)",
-      )
-      .run(
-        options.idempotencyKey,
-        actor.personId,
-        command.verb,
-        inputHash,
-        JSON.stringify(result ?? null),
-        entryId,
-        at,
-      );
+    keepAnswer(sqlite, options.idempotencyKey, { actor, command: command.verb, inputHash, at }, answer);
   }
-  return { result, entryId, replayed: false };
+  return answer;
+}
+
+const KEEP_ANSWER =
+  "insert into audit_idempotency (key, actor_id, command, input_hash, answer, entry_id, at) values (?, ?, ?, ?, ?, ?, ?)";
+
+type Asked = { actor: Actor; command: string; inputHash: string; at: number };
+
+/** Keeps the first answer under its key, without expiry, so that the same send is answered alike. */
+function keepAnswer(sqlite: Sqlite, key: string, asked: Asked, answer: Answer<unknown>): void {
+  const { actor, command, inputHash, at } = asked;
+  const json = JSON.stringify(answer.result ?? null);
+  sqlite.prepare(KEEP_ANSWER).run(key, actor.personId, command, inputHash, json, answer.entryId, at);
 }

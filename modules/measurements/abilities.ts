@@ -16,7 +16,13 @@ export const measurementsMay = definePermissions("measurements", {
   },
   record: {
     says: "record readings",
-    roles: { aquarist: "own areas", operator: "everywhere", analyst: "everywhere", lead: "everywhere", veterinarian: "everywhere" },
+    roles: {
+      aquarist: "own areas",
+      operator: "everywhere",
+      analyst: "everywhere",
+      lead: "everywhere",
+      veterinarian: "everywhere",
+    },
   },
   correct: {
     says: "correct readings",
@@ -24,12 +30,27 @@ export const measurementsMay = definePermissions("measurements", {
   },
   explain: {
     says: "explain readings",
-    roles: { aquarist: "own areas", operator: "everywhere", analyst: "everywhere", lead: "everywhere", veterinarian: "everywhere" },
+    roles: {
+      aquarist: "own areas",
+      operator: "everywhere",
+      analyst: "everywhere",
+      lead: "everywhere",
+      veterinarian: "everywhere",
+    },
   },
   planWatch: { says: "say what is read where", roles: { lead: "everywhere", admin: "everywhere" } },
-  proposeLimits: { says: "propose limits", roles: { lead: "everywhere", veterinarian: "everywhere", analyst: "everywhere" } },
+  proposeLimits: {
+    says: "propose limits",
+    roles: { lead: "everywhere", veterinarian: "everywhere", analyst: "everywhere" },
+  },
   approveLimits: { says: "approve limits", roles: { lead: "everywhere" } },
-  deliver: { says: "bring in readings in bulk", roles: { analyst: "everywhere", lead: "everywhere", operator: "everywhere" } },
-  withdrawDelivery: { says: "withdraw readings that came in bulk", roles: { analyst: "everywhere", lead: "everywhere" } },
+  deliver: {
+    says: "bring in readings in bulk",
+    roles: { analyst: "everywhere", lead: "everywhere", operator: "everywhere" },
+  },
+  withdrawDelivery: {
+    says: "withdraw readings that came in bulk",
+    roles: { analyst: "everywhere", lead: "everywhere" },
+  },
   judgeAgain: { says: "judge readings again", roles: "system" },
 });

@@ -1,22 +1,25 @@
 import "server-only";
 
 export { measurementsMay } from "./abilities";
-export { confirmReading, correctReading, explainReading, voidReading } from "./commands/correct-reading";
+export { confirmReading } from "./commands/confirm-reading";
+export { correctReading } from "./commands/correct-reading";
 export { decideLimits } from "./commands/decide-limits";
 export { growDelivery, openDelivery, publishDelivery, withdrawDelivery } from "./commands/deliver-readings";
+export { explainReading } from "./commands/explain-reading";
 export { judgeSeriesAgain } from "./commands/judge-series-again";
 export { planWatch } from "./commands/plan-watch";
 export { proposeLimits } from "./commands/propose-limits";
 export { recordReadings } from "./commands/record-readings";
 export { saveLimitTemplate } from "./commands/save-limit-template";
+export { voidReading } from "./commands/void-reading";
 export { measurementsEvents } from "./events";
 export { addExplanation, getInForce } from "./explanations";
 export { type EqualReading, equalFinder, foreseeVerdict, type OfferedReading } from "./foresee";
 export { CLOCK_SLACK_MS, readTypedValue } from "./intake";
 export { IntakeCache } from "./intake-cache";
 export { limitsInForce } from "./limits";
-export { getLimitWorkbook, listLimits, listLimitTemplates, listLimitWorkbooks } from "./queries/list-limits";
 export { listLimitBoard } from "./queries/list-limit-board";
+export { getLimitWorkbook, listLimits, listLimitTemplates, listLimitWorkbooks } from "./queries/list-limits";
 export { getReading, getSeries, listReadings } from "./queries/list-readings";
 export { listWatch } from "./queries/list-watch";
 export { listWatchPlan } from "./queries/list-watch-plan";

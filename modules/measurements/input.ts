@@ -32,7 +32,10 @@ export type DeliveredReading = ReadingInput & { plainText?: string | null | unde
 
 export const recordReadingsInput = z.strictObject({
   source: z.enum(["entry", "grid"]).default("entry"),
-  readings: z.array(readingInput).min(1, "Send at least one reading.").max(500, "Send at most 500 readings at once."),
+  readings: z
+    .array(readingInput)
+    .min(1, "Send at least one reading.")
+    .max(500, "Send at most 500 readings at once."),
 });
 
 export const correctReadingInput = z.strictObject({
@@ -65,12 +68,19 @@ export const limitShapeInput = z.discriminatedUnion("kind", [
   z.strictObject({ kind: z.literal("constant"), bounds: boundsInput }),
   z.strictObject({
     kind: z.literal("ramp"),
-    knots: z.array(z.strictObject({ at: moment, bounds: boundsInput })).min(2, "A ramp needs a beginning and an end."),
+    knots: z
+      .array(z.strictObject({ at: moment, bounds: boundsInput }))
+      .min(2, "A ramp needs a beginning and an end."),
   }),
   z.strictObject({
     kind: z.literal("season"),
     knots: z
-      .array(z.strictObject({ monthDay: z.string().regex(/^\d{2}-\d{2}$/, "Write month and day, such as 03-21."), bounds: boundsInput }))
+      .array(
+        z.strictObject({
+          monthDay: z.string().regex(/^\d{2}-\d{2}$/, "Write month and day, such as 03-21."),
+          bounds: boundsInput,
+        }),
+      )
       .min(2, "A season needs at least two days of the year."),
   }),
 ]);
@@ -115,7 +125,10 @@ export const saveLimitTemplateInput = z.strictObject({
   templateId: id.nullish(),
   name: z.string().trim().min(2, "Give the template a name.").max(80),
   note: note.default(""),
-  rows: z.array(z.strictObject({ parameterId: id, shape: limitShapeInput })).min(1, "Put at least one limit into it.").max(200),
+  rows: z
+    .array(z.strictObject({ parameterId: id, shape: limitShapeInput }))
+    .min(1, "Put at least one limit into it.")
+    .max(200),
 });
 
 export const limitTemplateFormInput = saveLimitTemplateInput.pick({ name: true, note: true });

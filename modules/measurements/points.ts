@@ -2,6 +2,7 @@ import { inArray } from "drizzle-orm";
 import type { Orm } from "@/db/database";
 import { notFound } from "@/lib/problem";
 import { pointDirectory } from "@/modules/systems";
+import { reading } from "./schema";
 import { askingStatements } from "./statements";
 
 export type PointPlace = typeof pointDirectory.$inferSelect;
@@ -21,4 +22,14 @@ export function areasOfPoints(db: Orm, pointIds: readonly number[]): number[] {
     .where(inArray(pointDirectory.pointId, [...new Set(pointIds)]))
     .all();
   return rows.map((row) => row.areaId);
+}
+
+/** The area in which a reading was taken, as a list for a command's `areas`; none where there is no such reading. */
+export function areaOfReading(ctx: { db: Orm }, { readingId }: { readingId: number }): number[] {
+  const row = ctx.db
+    .select({ pointId: reading.pointId })
+    .from(reading)
+    .where(eq(reading.id, readingId))
+    .get();
+  return row ? areasOfPoints(ctx.db, [row.pointId]) : [];
 }

@@ -1,8 +1,8 @@
 import { eq } from "drizzle-orm";
 import { z } from "zod";
 import { defineTask, upkeep } from "@/modules/audit";
-import { sendLetter } from "./send-letter";
 import { mail } from "./schema";
+import { sendLetter } from "./send-letter";
 
 /**
  * Sends one letter of the outbox. A letter that was sent is not sent again; one whose sending fails stays queued and is
@@ -28,7 +28,11 @@ export const deliverMail = defineTask({
     } catch (cause) {
       const error = cause instanceof Error ? cause.message : String(cause);
       upkeep(db, (orm) =>
-        orm.update(mail).set({ state: "failed", attempts: row.attempts + 1, error }).where(eq(mail.id, mailId)).run(),
+        orm
+          .update(mail)
+          .set({ state: "failed", attempts: row.attempts + 1, error })
+          .where(eq(mail.id, mailId))
+          .run(),
       );
       throw cause;
     }

@@ -8,7 +8,10 @@ type Outgoing = { id: number; to: string; subject: string; body: string; queuedA
 
 function message(letter: Outgoing) {
   const { MAIL_FROM, STILLWELL_URL } = settings();
-  const stamp = createHash("sha256").update(`${letter.id} ${letter.queuedAt} ${letter.to}`).digest("hex").slice(0, 32);
+  const stamp = createHash("sha256")
+    .update(`${letter.id} ${letter.queuedAt} ${letter.to}`)
+    .digest("hex")
+    .slice(0, 32);
   return {
     from: MAIL_FROM,
     to: letter.to,

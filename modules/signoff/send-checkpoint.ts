@@ -9,10 +9,9 @@ import {
   chainHead,
   defineCommand,
   defineTask,
-  insertJob,
   runCommand,
+  scheduleOnce,
   schemaHash,
-  upkeep,
 } from "@/modules/audit";
 import { addressesOf } from "@/modules/identity";
 import { queueMail } from "@/modules/notifications";
@@ -21,7 +20,11 @@ import { queueMail } from "@/modules/notifications";
 export const sendCheckpoint = defineCommand({
   verb: "sendCheckpoint",
   permission: auditMay.makeCheckpoint,
-  input: z.strictObject({ entryId: z.number().int(), hash: z.string().length(64), schemaHash: z.string().length(64) }),
+  input: z.strictObject({
+    entryId: z.number().int(),
+    hash: z.string().length(64),
+    schemaHash: z.string().length(64),
+  }),
   run(ctx, input) {
     const { STILLWELL_FACILITY } = settings();
     const to = addressesOf(ctx.db, ["auditor", "admin"]);
@@ -37,7 +40,11 @@ export const sendCheckpoint = defineCommand({
     }
     return {
       result: { sentTo: to.length },
-      event: { kind: auditEvents.checkpointMade, subject: { type: "checkpoint", id: input.entryId }, payload: input },
+      event: {
+        kind: auditEvents.checkpointMade,
+        subject: { type: "checkpoint", id: input.entryId },
+        payload: input,
+      },
     };
   },
 });
@@ -59,11 +66,5 @@ export const dailyCheckpoint = defineTask({
 
 /** Puts the next checkpoint into the queue where none waits. */
 export function scheduleCheckpoint(db: Database, clock: Clock, inMs = 0): void {
-  upkeep(db, () => {
-    const { sqlite } = db.writer;
-    const waits = sqlite
-      .prepare("select 1 from audit_job where kind = ? and done_at is null and failed_at is null and run_at > ?")
-      .get(dailyCheckpoint.verb, clock.now());
-    if (!waits) insertJob(sqlite, dailyCheckpoint.verb, {}, null, clock.now(), clock.now() + inMs);
-  });
+  scheduleOnce(db, dailyCheckpoint.verb, clock.now(), clock.now() + inMs);
 }

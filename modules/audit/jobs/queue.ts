@@ -1,7 +1,8 @@
-import type { Sqlite } from "@/db/database";
+import type { Database, Sqlite } from "@/db/database";
 import { processSingleton } from "@/lib/process-singleton";
 import type { QueuedWork } from "../define-command";
 import type { HistoryEvent } from "../model";
+import { upkeep } from "../upkeep";
 
 /** Event verb → the work that follows it, with its input made from the event. */
 export type Reaction = { work: QueuedWork; input(event: HistoryEvent): unknown };
@@ -32,4 +33,17 @@ export function insertJob(
   sqlite
     .prepare("insert into audit_job (kind, input, cause_entry_id, created_at, run_at) values (?, ?, ?, ?, ?)")
     .run(verb, JSON.stringify(input ?? {}), causeEntryId, at, runAt);
+}
+
+/** Puts work into the queue for later, outside a command, unless the same work waits for a later moment already. */
+export function scheduleOnce(db: Database, verb: string, at: number, runAt: number): void {
+  upkeep(db, () => {
+    const { sqlite } = db.writer;
+    const waits = sqlite
+      .prepare(
+        "select 1 from audit_job where kind = ? and done_at is null and failed_at is null and run_at > ?",
+      )
+      .get(verb, at);
+    if (!waits) insertJob(sqlite, verb, {}, null, at, runAt);
+  });
 }

@@ -38,10 +38,13 @@ export const decideLimits = defineCommand({
   run(ctx, { workbookId, decision, comment }) {
     const book = ctx.db.select().from(limitWorkbook).where(eq(limitWorkbook.id, workbookId)).get();
     if (!book) throw notFound("such workbook of limits");
-    if (book.state !== "proposed") throw new Problem("conflict", "These limits have been decided on already.");
+    if (book.state !== "proposed")
+      throw new Problem("conflict", "These limits have been decided on already.");
     mustBeAnother(ctx.actor.personId, book.proposedBy, "proposal");
     if (decision === "decline" && comment.length < 3) {
-      throw new Problem("invalid", "Say why.", [{ pointer: "/comment", code: "required", detail: "Say why you decline." }]);
+      throw new Problem("invalid", "Say why.", [
+        { pointer: "/comment", code: "required", detail: "Say why you decline." },
+      ]);
     }
     const rows = workbookRows(ctx.db, workbookId);
     const state = decision === "approve" ? "approved" : "declined";

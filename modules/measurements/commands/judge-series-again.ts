@@ -57,7 +57,10 @@ export const judgeSeriesAgain: Command<typeof inputSchema, { judged: number }> =
     }
     return {
       result: { judged: rows.length },
-      event: { kind: measurementsEvents.judgedAgain, payload: { pointId, parameterId, cause, judged: rows.length } },
+      event: {
+        kind: measurementsEvents.judgedAgain,
+        payload: { pointId, parameterId, cause, judged: rows.length },
+      },
     };
   },
 });

@@ -1,10 +1,10 @@
 import { and, eq, max } from "drizzle-orm";
+import type { z } from "zod";
 import type { Orm } from "@/db/database";
 import { invariant } from "@/lib/invariant";
 import { type FieldProblem, Problem } from "@/lib/problem";
 import { defineCommand } from "@/modules/audit";
 import { getParameter } from "@/modules/methods";
-import type { z } from "zod";
 import { measurementsMay } from "../abilities";
 import { measurementsEvents } from "../events";
 import { type limitRowInput, proposeLimitsInput } from "../input";
@@ -21,14 +21,29 @@ export function rowProblems(db: Orm, row: Row, pointer: string): FieldProblem[] 
   const name = `${place.systemCode} ${place.pointName}, ${parameter.name}`;
   const problems: FieldProblem[] = [];
   if (parameter.kind !== "number" && parameter.kind !== "count" && !row.suspendedReason) {
-    problems.push({ pointer: `${pointer}/shape`, code: "no-number", detail: `${name}: an answer needs no limits; it says itself what is off.` });
+    problems.push({
+      pointer: `${pointer}/shape`,
+      code: "no-number",
+      detail: `${name}: an answer needs no limits; it says itself what is off.`,
+    });
   }
   if (row.effectiveToAt && row.effectiveToAt <= row.effectiveFromAt) {
-    problems.push({ pointer: `${pointer}/effectiveToAt`, code: "order", detail: `${name}: the limits would end before they begin.` });
+    problems.push({
+      pointer: `${pointer}/effectiveToAt`,
+      code: "order",
+      detail: `${name}: the limits would end before they begin.`,
+    });
   }
   if (row.suspendedReason) return problems;
-  for (const problem of checkLimitShape(row.shape, { plausible: parameter.plausible, decimals: parameter.decimals })) {
-    problems.push({ pointer: `${pointer}/shape`, code: problem.code, detail: `${name}: ${problem.sentence}` });
+  for (const problem of checkLimitShape(row.shape, {
+    plausible: parameter.plausible,
+    decimals: parameter.decimals,
+  })) {
+    problems.push({
+      pointer: `${pointer}/shape`,
+      code: problem.code,
+      detail: `${name}: ${problem.sentence}`,
+    });
   }
   return problems;
 }
@@ -51,7 +66,8 @@ export const proposeLimits = defineCommand({
   run(ctx, input) {
     invariant(ctx.actor.personId !== null, "a person proposes limits");
     const problems = input.rows.flatMap((row, index) => rowProblems(ctx.db, row, `/rows/${index}`));
-    if (problems.length > 0) throw new Problem("invalid", problems[0]?.detail ?? "Some limits cannot be used.", problems);
+    if (problems.length > 0)
+      throw new Problem("invalid", problems[0]?.detail ?? "Some limits cannot be used.", problems);
     const book = ctx.db
       .insert(limitWorkbook)
       .values({

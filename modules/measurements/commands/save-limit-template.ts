@@ -18,17 +18,25 @@ export const saveLimitTemplate = defineCommand({
     invariant(ctx.actor.personId !== null, "a person keeps a template");
     const problems = rows.flatMap(({ parameterId, shape }, index): FieldProblem[] => {
       const parameter = getParameter(ctx.db, parameterId);
-      return checkLimitShape(shape, { plausible: parameter.plausible, decimals: parameter.decimals }).map((problem) => ({
-        pointer: `/rows/${index}/shape`,
-        code: problem.code,
-        detail: `${parameter.name}: ${problem.sentence}`,
-      }));
+      return checkLimitShape(shape, { plausible: parameter.plausible, decimals: parameter.decimals }).map(
+        (problem) => ({
+          pointer: `/rows/${index}/shape`,
+          code: problem.code,
+          detail: `${parameter.name}: ${problem.sentence}`,
+        }),
+      );
     });
-    if (problems.length > 0) throw new Problem("invalid", problems[0]?.detail ?? "Some limits cannot be used.", problems);
+    if (problems.length > 0)
+      throw new Problem("invalid", problems[0]?.detail ?? "Some limits cannot be used.", problems);
     const taken = ctx.db
       .select({ id: limitTemplate.id })
       .from(limitTemplate)
-      .where(and(sql`lower(${limitTemplate.name}) = lower(${name})`, templateId ? ne(limitTemplate.id, templateId) : undefined))
+      .where(
+        and(
+          sql`lower(${limitTemplate.name}) = lower(${name})`,
+          templateId ? ne(limitTemplate.id, templateId) : undefined,
+        ),
+      )
       .get();
     if (taken) throw invalidField("/name", "taken", "There is a template with this name already.");
     const values = { name, note, rows, changedBy: ctx.actor.personId, changedAt: ctx.at };

@@ -15,7 +15,12 @@ const moment = z.coerce.number().int();
 export const getSeries = defineQuery({
   name: "getSeries",
   permission: measurementsMay.read,
-  input: z.strictObject({ pointId: id, parameterId: id, fromAt: moment.default(0), toAt: moment.default(8.64e15) }),
+  input: z.strictObject({
+    pointId: id,
+    parameterId: id,
+    fromAt: moment.default(0),
+    toAt: moment.default(8.64e15),
+  }),
   run(ctx, { pointId, parameterId, fromAt, toAt }) {
     const place = ctx.db.select().from(pointDirectory).where(eq(pointDirectory.pointId, pointId)).get();
     if (!place || (ctx.areaIds !== null && !ctx.areaIds.includes(place.areaId))) throw notFound("such point");
@@ -106,8 +111,10 @@ export const getReading = defineQuery({
   input: z.strictObject({ readingId: id }),
   run(ctx, { readingId }) {
     const row = ctx.db.select().from(reading).where(eq(reading.id, readingId)).get();
-    const place = row && ctx.db.select().from(pointDirectory).where(eq(pointDirectory.pointId, row.pointId)).get();
-    if (!row || !place || (ctx.areaIds !== null && !ctx.areaIds.includes(place.areaId))) throw notFound("such reading");
+    const place =
+      row && ctx.db.select().from(pointDirectory).where(eq(pointDirectory.pointId, row.pointId)).get();
+    if (!row || !place || (ctx.areaIds !== null && !ctx.areaIds.includes(place.areaId)))
+      throw notFound("such reading");
     const chain = [row];
     for (let older = row.supersedesId; older !== null; older = chain[0]?.supersedesId ?? null) {
       const found = ctx.db.select().from(reading).where(eq(reading.id, older)).get();
@@ -120,7 +127,11 @@ export const getReading = defineQuery({
       newest = later?.id;
     }
     const ids = chain.map((each) => each.id);
-    const counts = ctx.db.select({ id: readingInForce.id }).from(readingInForce).where(eq(readingInForce.id, row.id)).get();
+    const counts = ctx.db
+      .select({ id: readingInForce.id })
+      .from(readingInForce)
+      .where(eq(readingInForce.id, row.id))
+      .get();
     return {
       reading: row,
       place,
@@ -128,8 +139,18 @@ export const getReading = defineQuery({
       /** False once it has been corrected, struck out or withdrawn. */
       isInForce: counts !== undefined,
       versions: chain,
-      judgements: ctx.db.select().from(judgement).where(inArray(judgement.readingId, ids)).orderBy(asc(judgement.id)).all(),
-      explanations: ctx.db.select().from(explanation).where(inArray(explanation.readingId, ids)).orderBy(asc(explanation.id)).all(),
+      judgements: ctx.db
+        .select()
+        .from(judgement)
+        .where(inArray(judgement.readingId, ids))
+        .orderBy(asc(judgement.id))
+        .all(),
+      explanations: ctx.db
+        .select()
+        .from(explanation)
+        .where(inArray(explanation.readingId, ids))
+        .orderBy(asc(explanation.id))
+        .all(),
     };
   },
 });

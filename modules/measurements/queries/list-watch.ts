@@ -12,7 +12,12 @@ import { readingInForce, watchItem } from "../schema";
 const RECENT = 20;
 
 /** The newest readings of a point and parameter up to a moment, newest first. */
-export function recentReadings(db: Orm, pointId: number, parameterId: number, limit = RECENT): RecentReading[] {
+export function recentReadings(
+  db: Orm,
+  pointId: number,
+  parameterId: number,
+  limit = RECENT,
+): RecentReading[] {
   return db
     .select({
       id: readingInForce.id,

@@ -21,6 +21,9 @@ export const listMail = defineQuery({
       .limit(limit)
       .all();
     // One-time links are secrets of the person written to, not of the administrator.
-    return rows.map((row) => ({ ...row, body: row.body.replace(/(\/(?:invitation|reset)\/)[\w-]+/g, "$1…") }));
+    return rows.map((row) => ({
+      ...row,
+      body: row.body.replace(/(\/(?:invitation|reset)\/)[\w-]+/g, "$1…"),
+    }));
   },
 });
