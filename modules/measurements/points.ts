@@ -1,4 +1,4 @@
-import { inArray } from "drizzle-orm";
+import { eq, inArray } from "drizzle-orm";
 import type { Orm } from "@/db/database";
 import { notFound } from "@/lib/problem";
 import { pointDirectory } from "@/modules/systems";

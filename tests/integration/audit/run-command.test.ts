@@ -15,11 +15,21 @@ const may = definePermissions("trial", {
 const rename = defineCommand({
   verb: "renameForTrial",
   permission: may.rename,
-  input: z.strictObject({ id: z.number().int(), name: z.string().min(1, "Write a name."), fail: z.boolean().default(false) }),
+  input: z.strictObject({
+    id: z.number().int(),
+    name: z.string().min(1, "Write a name."),
+    fail: z.boolean().default(false),
+  }),
   run(ctx, { id, name, fail }) {
     ctx.db.update(person).set({ name }).where(eq(person.id, id)).run();
     if (fail) throw new Error("the seal never happens");
-    return { result: { name }, event: { kind: { verb: "person.renamed", version: 1, says: "renamed" }, subject: { type: "person", id } } };
+    return {
+      result: { name },
+      event: {
+        kind: { verb: "person.renamed", version: 1, says: "renamed" },
+        subject: { type: "person", id },
+      },
+    };
   },
 });
 
@@ -28,7 +38,10 @@ const tend = defineCommand({
   permission: may.tend,
   input: z.strictObject({ areaId: z.number().int() }),
   areas: (_ctx, { areaId }) => [areaId],
-  run: (_ctx, { areaId }) => ({ result: areaId, event: { kind: { verb: "area.tended", version: 1, says: "tended" } } }),
+  run: (_ctx, { areaId }) => ({
+    result: areaId,
+    event: { kind: { verb: "area.tended", version: 1, says: "tended" } },
+  }),
 });
 
 const count = (bench: ReturnType<typeof testBench>) =>
@@ -39,8 +52,16 @@ describe("a command", () => {
     const bench = testBench();
     const admin = bench.person("Ines Marlow", ["admin"]);
     bench.run(admin, rename, { id: admin.personId ?? 0, name: "Inés Marlow" });
-    const entry = bench.db.reader.orm.select().from(auditEntry).where(eq(auditEntry.verb, "person.renamed")).get();
-    const change = bench.db.reader.orm.select().from(auditChange).where(eq(auditChange.entryId, entry?.id ?? 0)).all();
+    const entry = bench.db.reader.orm
+      .select()
+      .from(auditEntry)
+      .where(eq(auditEntry.verb, "person.renamed"))
+      .get();
+    const change = bench.db.reader.orm
+      .select()
+      .from(auditChange)
+      .where(eq(auditChange.entryId, entry?.id ?? 0))
+      .all();
     expect(change).toHaveLength(1);
     expect(JSON.parse(change[0]?.before ?? "")).toMatchObject({ name: "Ines Marlow" });
     expect(JSON.parse(change[0]?.after ?? "")).toMatchObject({ name: "Inés Marlow" });
@@ -51,7 +72,9 @@ describe("a command", () => {
     const bench = testBench();
     const admin = bench.person("Ines Marlow", ["admin"]);
     const before = count(bench);
-    expect(() => bench.run(admin, rename, { id: admin.personId ?? 0, name: "X", fail: true })).toThrow("never happens");
+    expect(() => bench.run(admin, rename, { id: admin.personId ?? 0, name: "X", fail: true })).toThrow(
+      "never happens",
+    );
     expect(count(bench)).toBe(before);
     expect(bench.db.reader.orm.select().from(person).get()?.name).toBe("Ines Marlow");
   });
@@ -72,7 +95,9 @@ describe("a command", () => {
     const before = count(bench);
     expect(bench.run(admin, rename, input, { idempotencyKey: "k-1" })).toEqual(first);
     expect(count(bench)).toBe(before);
-    expect(() => bench.run(admin, rename, { ...input, name: "Other" }, { idempotencyKey: "k-1" })).toThrow("idempotency key");
+    expect(() => bench.run(admin, rename, { ...input, name: "Other" }, { idempotencyKey: "k-1" })).toThrow(
+      "idempotency key",
+    );
   });
 
   it("in another area than one's own is refused", () => {
@@ -91,7 +116,11 @@ describe("a command", () => {
       bench.run(admin, rename, { id: "x" as never, name: "", extra: 1 } as never);
       expect.unreachable();
     } catch (cause) {
-      expect((cause as { errors: { pointer: string }[] }).errors.map((error) => error.pointer)).toEqual(["/id", "/name", ""]);
+      expect((cause as { errors: { pointer: string }[] }).errors.map((error) => error.pointer)).toEqual([
+        "/id",
+        "/name",
+        "",
+      ]);
     }
   });
 });
@@ -99,14 +128,16 @@ describe("a command", () => {
 describe("a write outside a command", () => {
   it("fails on any captured table", () => {
     const { db } = testBench();
-    const insert = "insert into identity_person (name, email, state, created_at) values ('X', 'x@corran.example', 'active', 0)";
+    const insert =
+      "insert into identity_person (name, email, state, created_at) values ('X', 'x@corran.example', 'active', 0)";
     expect(() => db.writer.sqlite.exec(insert)).toThrow("outside a command");
   });
 
   it("cannot replace a row either", () => {
     const bench = testBench();
     bench.person("Ines Marlow", ["admin"]);
-    const replace = "insert or replace into identity_person (id, name, email, state, created_at) values (1, 'X', 'x@corran.example', 'active', 0)";
+    const replace =
+      "insert or replace into identity_person (id, name, email, state, created_at) values (1, 'X', 'x@corran.example', 'active', 0)";
     expect(() => bench.db.writer.sqlite.exec(replace)).toThrow("outside a command");
   });
 
@@ -116,6 +147,8 @@ describe("a write outside a command", () => {
     const { sqlite } = bench.db.writer;
     expect(() => sqlite.exec("update audit_entry set verb = 'x'")).toThrow("only added to");
     expect(() => sqlite.exec("delete from audit_change")).toThrow("only added to");
-    expect(() => sqlite.exec("insert or replace into audit_change select * from audit_change limit 1")).toThrow();
+    expect(() =>
+      sqlite.exec("insert or replace into audit_change select * from audit_change limit 1"),
+    ).toThrow();
   });
 });

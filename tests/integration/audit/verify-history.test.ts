@@ -66,7 +66,9 @@ const alterCell =
     if (!row) return null;
     const columns = Object.keys(row).filter((name) => name !== "rowid");
     const column = columns[pick(columns.length)] ?? "";
-    sqlite.prepare(`update "${table}" set "${column}" = ? where rowid = ?`).run(another(row[column], pick), row.rowid);
+    sqlite
+      .prepare(`update "${table}" set "${column}" = ? where rowid = ?`)
+      .run(another(row[column], pick), row.rowid);
     return `${table}.${column} of row ${String(row.rowid)}`;
   };
 
@@ -86,7 +88,9 @@ const ALTERATIONS: Alter[] = [
   (sqlite, pick) => {
     const { n } = sqlite.prepare("select max(id) as n from audit_entry").get() as { n: number };
     const [a, b] = [1 + pick(n - 1), n];
-    sqlite.exec(`update audit_entry set id = -1 where id = ${a}; update audit_entry set id = ${a} where id = ${b}; update audit_entry set id = ${b} where id = -1`);
+    sqlite.exec(
+      `update audit_entry set id = -1 where id = ${a}; update audit_entry set id = ${a} where id = ${b}; update audit_entry set id = ${b} where id = -1`,
+    );
     return `entries ${a} and ${b} swapped`;
   },
 ];
@@ -102,7 +106,10 @@ describe("the history", () => {
     const sqlite = new BetterSqlite3(file);
     sqlite.pragma("foreign_keys = OFF");
     sqlite.pragma("ignore_check_constraints = ON");
-    const dropped = sqlite.prepare("select name, sql from sqlite_master where type = 'trigger'").all() as { name: string; sql: string }[];
+    const dropped = sqlite.prepare("select name, sql from sqlite_master where type = 'trigger'").all() as {
+      name: string;
+      sql: string;
+    }[];
     const missed: string[] = [];
     let found = 0;
     for (let number = 0; found + missed.length < 1000; number += 1) {
@@ -143,13 +150,21 @@ describe("the history", () => {
     const sqlite = new BetterSqlite3(file);
     sqlite.pragma("foreign_keys = OFF");
     const { head } = verifyHistory(sqlite);
-    const triggers = sqlite.prepare("select name, sql from sqlite_master where type = 'trigger'").all() as { name: string; sql: string }[];
+    const triggers = sqlite.prepare("select name, sql from sqlite_master where type = 'trigger'").all() as {
+      name: string;
+      sql: string;
+    }[];
     for (const { name } of triggers) sqlite.exec(`drop trigger "${name}"`);
     // The last entry recorded readings only: its rows go with it.
     const last = head?.entryId ?? 0;
-    const changes = sqlite.prepare("select table_name as t, row_key as k from audit_change where entry_id = ? order by id desc").all(last);
-    for (const { t, k } of changes as { t: string; k: string }[]) sqlite.exec(`delete from "${t}" where id = ${k}`);
-    sqlite.exec(`delete from audit_change where entry_id = ${last}; delete from audit_entry where id = ${last}`);
+    const changes = sqlite
+      .prepare("select table_name as t, row_key as k from audit_change where entry_id = ? order by id desc")
+      .all(last);
+    for (const { t, k } of changes as { t: string; k: string }[])
+      sqlite.exec(`delete from "${t}" where id = ${k}`);
+    sqlite.exec(
+      `delete from audit_change where entry_id = ${last}; delete from audit_entry where id = ${last}`,
+    );
     for (const { sql } of triggers) sqlite.exec(sql);
     expect(verifyHistory(sqlite).findings).toEqual([]);
     const findings = verifyHistory(sqlite, head ? [head] : []).findings;
@@ -160,11 +175,16 @@ describe("the history", () => {
   it("names the record that was altered first", () => {
     const { file } = livedIn();
     const sqlite = new BetterSqlite3(file);
-    const triggers = sqlite.prepare("select name, sql from sqlite_master where type = 'trigger'").all() as { name: string; sql: string }[];
+    const triggers = sqlite.prepare("select name, sql from sqlite_master where type = 'trigger'").all() as {
+      name: string;
+      sql: string;
+    }[];
     for (const { name } of triggers) sqlite.exec(`drop trigger "${name}"`);
     sqlite.exec("update measurements_reading set value = 99 where id in (4, 2)");
     for (const { sql } of triggers) sqlite.exec(sql);
-    expect(verifyHistory(sqlite).findings[0]?.sentence).toBe("measurements_reading 2 differs from its history in value");
+    expect(verifyHistory(sqlite).findings[0]?.sentence).toBe(
+      "measurements_reading 2 differs from its history in value",
+    );
     sqlite.close();
   });
 });

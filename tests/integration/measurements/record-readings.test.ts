@@ -1,8 +1,8 @@
 import { desc, eq } from "drizzle-orm";
 import { describe, expect, it } from "vitest";
 import { HOUR_MS } from "@/lib/clock";
-import { JobRunner, runCommand, verifyHistory } from "@/modules/audit";
 import { SYSTEM_ACTOR } from "@/modules/access";
+import { JobRunner, runCommand, verifyHistory } from "@/modules/audit";
 import {
   confirmReading,
   correctReading,
@@ -25,7 +25,11 @@ function begin() {
   const take = (parameterId: number, text: string, at: number, more: Record<string, unknown> = {}) =>
     bench.run(joe, recordReadings, { readings: [water.reading(parameterId, text, at, more)] }).readings[0];
   const statusOf = (readingId: number | undefined) =>
-    bench.db.reader.orm.select().from(readingInForce).where(eq(readingInForce.id, readingId ?? 0)).get()?.status;
+    bench.db.reader.orm
+      .select()
+      .from(readingInForce)
+      .where(eq(readingInForce.id, readingId ?? 0))
+      .get()?.status;
   return { bench, water, joe, take, statusOf };
 }
 
@@ -53,8 +57,18 @@ describe("a reading", () => {
     const six = take(water.temperatureId, "24.0", NOON);
     const eighteen = take(water.temperatureId, "25.2", NOON + 12 * HOUR_MS);
     const twelve = take(water.temperatureId, "24.6", NOON + 6 * HOUR_MS);
-    expect([six, twelve, eighteen].map((each) => statusOf(each?.readingId))).toEqual(["within", "within", "out"]);
-    expect(bench.db.reader.orm.select().from(judgement).where(eq(judgement.readingId, eighteen?.readingId ?? 0)).all().length).toBeGreaterThan(0);
+    expect([six, twelve, eighteen].map((each) => statusOf(each?.readingId))).toEqual([
+      "within",
+      "within",
+      "out",
+    ]);
+    expect(
+      bench.db.reader.orm
+        .select()
+        .from(judgement)
+        .where(eq(judgement.readingId, eighteen?.readingId ?? 0))
+        .all().length,
+    ).toBeGreaterThan(0);
   });
 
   it("that comes late judges again what came after it, and the old judgement stays", () => {
@@ -89,7 +103,9 @@ describe("a reading", () => {
     const answer = take(water.temperatureId, "81.2", NOON);
     expect(answer).toMatchObject({ status: "implausible", mustBeConfirmed: true });
     bench.run(joe, confirmReading, { readingId: answer?.readingId ?? 0 });
-    expect(() => bench.run(joe, confirmReading, { readingId: answer?.readingId ?? 0 })).toThrow("confirmed already");
+    expect(() => bench.run(joe, confirmReading, { readingId: answer?.readingId ?? 0 })).toThrow(
+      "confirmed already",
+    );
   });
 
   it("sent twice is one, and a UUID cannot stand for another value", () => {
@@ -98,7 +114,9 @@ describe("a reading", () => {
     bench.run(joe, recordReadings, { readings: [sent] });
     expect(bench.run(joe, recordReadings, { readings: [sent] }).readings[0]?.isRepeat).toBe(true);
     expect(bench.db.reader.orm.select().from(readingInForce).all()).toHaveLength(1);
-    expect(() => bench.run(joe, recordReadings, { readings: [{ ...sent, typedText: "13.5" }] })).toThrow("another reading");
+    expect(() => bench.run(joe, recordReadings, { readings: [{ ...sent, typedText: "13.5" }] })).toThrow(
+      "another reading",
+    );
   });
 
   it("is kept as typed beside its canonical value", () => {
@@ -125,9 +143,23 @@ describe("a reading", () => {
   });
 
   it.each([
-    ["in the future", (water: ReturnType<typeof waterFor>) => water.reading(water.temperatureId, "13", NOON + 48 * HOUR_MS), "future"],
-    ["in a unit that does not fit", (water: ReturnType<typeof waterFor>) => water.reading(water.temperatureId, "13", NOON, { typedUnit: "mg/L" }), "not accepted"],
-    ["taken by nobody we know", (water: ReturnType<typeof waterFor>) => water.reading(water.temperatureId, "13", NOON, { takenBy: 999 }), "no such person"],
+    [
+      "in the future",
+      (water: ReturnType<typeof waterFor>) => water.reading(water.temperatureId, "13", NOON + 48 * HOUR_MS),
+      "future",
+    ],
+    [
+      "in a unit that does not fit",
+      (water: ReturnType<typeof waterFor>) =>
+        water.reading(water.temperatureId, "13", NOON, { typedUnit: "mg/L" }),
+      "not accepted",
+    ],
+    [
+      "taken by nobody we know",
+      (water: ReturnType<typeof waterFor>) =>
+        water.reading(water.temperatureId, "13", NOON, { takenBy: 999 }),
+      "no such person",
+    ],
   ])("%s is refused", (_what, make, sentence) => {
     const { bench, water, joe } = begin();
     expect(() => bench.run(joe, recordReadings, { readings: [make(water)] })).toThrow(sentence);
@@ -136,7 +168,10 @@ describe("a reading", () => {
   it("of another area than one's own is refused, also when it hides among one's own", () => {
     const { bench, water, joe } = begin();
     const other = waterFor(bench, "REEF");
-    const readings = [water.reading(water.temperatureId, "13", NOON), other.reading(other.temperatureId, "25", NOON)];
+    const readings = [
+      water.reading(water.temperatureId, "13", NOON),
+      other.reading(other.temperatureId, "25", NOON),
+    ];
     expect(() => bench.run(joe, recordReadings, { readings })).toThrow("areas you are assigned to");
     expect(bench.db.reader.orm.select().from(readingInForce).all()).toHaveLength(0);
   });
@@ -158,17 +193,29 @@ describe("a correction", () => {
     expect(statusOf(second?.readingId)).toBe("within");
     expect(statusOf(first?.readingId)).toBeUndefined();
     expect(statusOf(corrected.readingId)).toBe("within");
-    const kept = bench.db.reader.sqlite.prepare("select typed_text from measurements_reading where id = ?").get(first?.readingId);
+    const kept = bench.db.reader.sqlite
+      .prepare("select typed_text from measurements_reading where id = ?")
+      .get(first?.readingId);
     expect(kept).toEqual({ typed_text: "20.0" });
     expect(() =>
-      bench.run(joe, correctReading, { readingId: first?.readingId ?? 0, uuid: crypto.randomUUID(), typedText: "1", reason: "again" }),
+      bench.run(joe, correctReading, {
+        readingId: first?.readingId ?? 0,
+        uuid: crypto.randomUUID(),
+        typedText: "1",
+        reason: "again",
+      }),
     ).toThrow("has been corrected");
   });
 
   it("without a reason is refused", () => {
     const { bench, water, joe, take } = begin();
     const first = take(water.temperatureId, "20.0", NOON);
-    const input = { readingId: first?.readingId ?? 0, uuid: crypto.randomUUID(), typedText: "21", reason: " " };
+    const input = {
+      readingId: first?.readingId ?? 0,
+      uuid: crypto.randomUUID(),
+      typedText: "21",
+      reason: " ",
+    };
     expect(() => bench.run(joe, correctReading, input)).toThrow("must be mended");
   });
 
@@ -177,7 +224,12 @@ describe("a correction", () => {
     const first = take(water.temperatureId, "20.0", NOON);
     bench.run(joe, voidReading, { readingId: first?.readingId ?? 0, reason: "wrong system" });
     expect(statusOf(first?.readingId)).toBeUndefined();
-    const input = { readingId: first?.readingId ?? 0, uuid: crypto.randomUUID(), typedText: "21", reason: "typo" };
+    const input = {
+      readingId: first?.readingId ?? 0,
+      uuid: crypto.randomUUID(),
+      typedText: "21",
+      reason: "typo",
+    };
     expect(() => bench.run(joe, correctReading, input)).toThrow("struck out");
   });
 });
@@ -189,7 +241,10 @@ describe("a delivery of readings", () => {
     water.limit(water.temperatureId, { kind: "constant", bounds: { greatestChange24h: 1.0 } });
     const neighbour = take(water.temperatureId, "25.2", NOON + 6 * HOUR_MS);
     const { deliveryId } = bench.run(ana, openDelivery, { sourceRef: "import:1" });
-    const readings = [water.reading(water.temperatureId, "24.0", NOON), water.reading(water.temperatureId, "24.1", NOON + HOUR_MS)];
+    const readings = [
+      water.reading(water.temperatureId, "24.0", NOON),
+      water.reading(water.temperatureId, "24.1", NOON + HOUR_MS),
+    ];
     bench.run(ana, growDelivery, { deliveryId, readings });
     const seen = () => bench.db.reader.orm.select().from(readingInForce).all().length;
     expect(seen()).toBe(1);
@@ -216,8 +271,18 @@ describe("a delivery of readings", () => {
 
   it("cannot be judged again by a person", () => {
     const { bench, water, joe } = begin();
-    const input = { pointId: water.pointId, parameterId: water.temperatureId, fromAt: 0, toAt: null, cause: "new-limits" as const };
-    expect(() => runCommand(bench.db, joe, judgeSeriesAgain, input, { clock: bench.clock })).toThrow("does not allow");
-    expect(runCommand(bench.db, SYSTEM_ACTOR, judgeSeriesAgain, input, { clock: bench.clock }).result).toEqual({ judged: 0 });
+    const input = {
+      pointId: water.pointId,
+      parameterId: water.temperatureId,
+      fromAt: 0,
+      toAt: null,
+      cause: "new-limits" as const,
+    };
+    expect(() => runCommand(bench.db, joe, judgeSeriesAgain, input, { clock: bench.clock })).toThrow(
+      "does not allow",
+    );
+    expect(
+      runCommand(bench.db, SYSTEM_ACTOR, judgeSeriesAgain, input, { clock: bench.clock }).result,
+    ).toEqual({ judged: 0 });
   });
 });
