@@ -32,7 +32,8 @@ export const RECORD_GATES: RecordGates = {
   measurements_explanation: { may: seeReadings, area: ofReading },
   measurements_watch_item: { may: seeReadings, area: ofPoint },
   measurements_limit_version: { may: seeReadings, area: ofPoint },
-  measurements_limit_workbook: { may: seeReadings },
+  // A workbook may speak of several areas: its history is for those who work on limits everywhere.
+  measurements_limit_workbook: { may: measurementsMay.proposeLimits },
   measurements_limit_template: { may: seeReadings },
   imports_import: { may: importsMay.read },
   imports_file: { may: importsMay.read },

@@ -21,8 +21,7 @@ export interface ShownValue {
 
 /**
  * What does a stored reading look like on screen and paper?
- * @example shownValue({ value: 18, qualifier: "", answer: null, typedText: "64.4", typedUnit: "°F" },
- *   { kind: "number", choices: [], decimals: 1, unit: "°C" }) // { figure: "18.0", unit: "°C", asTyped: "64.4 °F" }
+ * @example shownValue({ value: 18, qualifier: "", answer: null, typedText: "64.4", typedUnit: "°F" }, { kind: "number", choices: [], decimals: 1, unit: "°C" }).figure // => "18.0"
  */
 export function shownValue(reading: Stored, parameter: Shape): ShownValue {
   if (parameter.kind === "choice" || parameter.kind === "yes-no") {
