@@ -3,7 +3,7 @@ import type { ReactNode } from "react";
 
 export interface Crumb {
   label: string;
-  /** Without it, the crumb is where you are. */
+  /** Without it, the crumb is words alone; the last one is where you are. */
   href?: string;
 }
 
@@ -64,9 +64,7 @@ function Crumbs({ crumbs }: { crumbs: readonly Crumb[] }) {
               </span>
             )}
             {crumb.href === undefined ? (
-              <span aria-current="page" className="font-semibold text-ink">
-                {crumb.label}
-              </span>
+              <CrumbWords label={crumb.label} isHere={index === crumbs.length - 1} />
             ) : (
               <Link
                 href={crumb.href}
@@ -79,5 +77,14 @@ function Crumbs({ crumbs }: { crumbs: readonly Crumb[] }) {
         ))}
       </ol>
     </nav>
+  );
+}
+
+function CrumbWords({ label, isHere }: { label: string; isHere: boolean }) {
+  if (!isHere) return <span>{label}</span>;
+  return (
+    <span aria-current="page" className="font-semibold text-ink">
+      {label}
+    </span>
   );
 }
