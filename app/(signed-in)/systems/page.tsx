@@ -8,7 +8,7 @@ import { listWatch } from "@/modules/measurements";
 import { newestAt, OffWords, worstOf } from "@/modules/measurements/ui/off-words";
 import { listOperatingVolumes, listSystems, systemsMay } from "@/modules/systems";
 import { SystemsList } from "@/modules/systems/ui/systems-list";
-import { readingUnits } from "@/modules/systems/ui/volume-units";
+import { shownVolumeUnit } from "@/modules/systems/ui/volume-units";
 
 export const metadata: Metadata = { title: "Systems" };
 
@@ -34,7 +34,10 @@ export default async function SystemsPage() {
   return (
     <SystemsList
       systems={listed}
-      volumeUnit={readingUnits(account?.preferredUnits ?? {}).volume}
+      volumeUnit={shownVolumeUnit(
+        account?.preferredUnits ?? {},
+        Math.max(0, ...systems.map((each) => each.volumeL ?? 0)),
+      )}
       actions={
         may(actor, systemsMay.manageSystems) && <LinkButton href="/setup/systems">Set up systems</LinkButton>
       }

@@ -28,6 +28,9 @@ export const THEME = themeQuartz.withParams({
   spacing: 6,
 });
 
+/** Keeps a unit such as mg/L O2 together in the head. */
+const NO_BREAK_SPACE = "\u00a0";
+
 export const keyOf = (row: SheetRow, column: SheetColumn) => cellKey(row.pointId, column.parameterId);
 export const columnId = (column: SheetColumn) => `p${column.parameterId}`;
 
@@ -37,10 +40,16 @@ export function columnsOf(desk: GridDesk): ColDef<SheetRow>[] {
     colId: "system",
     headerName: "System",
     pinned: "left",
-    width: 148,
+    width: 176,
     suppressMovable: true,
     suppressNavigable: true,
-    cellStyle: { display: "flex", alignItems: "center", fontWeight: 600, lineHeight: 1.2 },
+    cellStyle: {
+      display: "flex",
+      alignItems: "center",
+      fontWeight: 600,
+      lineHeight: 1.2,
+      whiteSpace: "normal",
+    },
     valueGetter: ({ data }) =>
       data ? `${data.systemCode}${data.isDefaultPoint ? "" : ` ${data.pointName.toLowerCase()}`}` : "",
   };
@@ -48,10 +57,12 @@ export function columnsOf(desk: GridDesk): ColDef<SheetRow>[] {
     const unit = unitLabel(column.unit);
     return {
       colId: columnId(column),
-      headerName: unit === "" ? column.name : `${column.name}, ${unit}`,
+      headerName: unit === "" ? column.name : `${column.name}, ${unit.replaceAll(" ", NO_BREAK_SPACE)}`,
+      headerClass: "ag-right-aligned-header",
       wrapHeaderText: true,
-      minWidth: 132,
-      width: 140,
+      autoHeaderHeight: true,
+      minWidth: 140,
+      flex: 1,
       suppressMovable: true,
       sortable: false,
       valueGetter: ({ data }) => (data ? desk.view(keyOf(data, column)).text : ""),

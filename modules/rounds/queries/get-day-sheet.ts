@@ -1,10 +1,10 @@
-import { and, asc, eq, gte, inArray, isNotNull, lt } from "drizzle-orm";
+import { and, asc, desc, eq, gte, inArray, isNotNull, isNull, lt } from "drizzle-orm";
 import { z } from "zod";
 import type { Orm } from "@/db/database";
 import { DAY_MS } from "@/lib/clock";
 import { notFound } from "@/lib/problem";
 import { defineQuery } from "@/modules/audit";
-import { limitsInForce, reading } from "@/modules/measurements";
+import { limitsInForce, reading, watchItem } from "@/modules/measurements";
 import type { Bounds } from "@/modules/measurements/model";
 import { allParameters } from "@/modules/methods";
 import { signaturesUnder } from "@/modules/signoff";
@@ -23,6 +23,30 @@ function boundsOf(db: Orm, { lines }: DaySheet): Record<number, Bounds> {
     if (limits.state === "in-force") bounds[line.readingId] = limits.bounds;
   }
   return bounds;
+}
+
+/** Where each line stands in the round as it is planned now, by reading; what is in no plan has no place and comes last. */
+function placesOf(db: Orm, { areaId, lines }: DaySheet): Record<number, number> {
+  const plan = db
+    .select({ pointId: watchItem.pointId, parameterId: watchItem.parameterId })
+    .from(watchItem)
+    .innerJoin(pointDirectory, eq(pointDirectory.pointId, watchItem.pointId))
+    .where(and(eq(pointDirectory.areaId, areaId), isNull(watchItem.endedAt)))
+    .orderBy(
+      asc(pointDirectory.systemOrder),
+      asc(pointDirectory.systemCode),
+      desc(pointDirectory.isDefaultPoint),
+      asc(pointDirectory.pointCode),
+      asc(watchItem.position),
+    )
+    .all();
+  const placeOf = new Map(plan.map((item, place) => [`${item.pointId}:${item.parameterId}`, place]));
+  return Object.fromEntries(
+    lines.flatMap(({ readingId, pointId, parameterId }) => {
+      const place = placeOf.get(`${pointId}:${parameterId}`);
+      return place === undefined ? [] : [[readingId, place]];
+    }),
+  );
 }
 
 /** What corrected lines said before, by the reading that was corrected. */
@@ -85,6 +109,7 @@ export const getDaySheet = defineQuery({
       signatures: signaturesUnder(ctx.db, { type: "day-sheet", id: `${areaId}/${onDay}` }, sheet.contentHash),
       hindrances: ctx.actor.personId === null ? [] : reviewHindrances(sheet.lines, ctx.actor.personId),
       bounds: boundsOf(ctx.db, sheet),
+      places: placesOf(ctx.db, sheet),
       oldValues: oldValuesOf(ctx.db, sheet),
       struckOut: struckOutOf(ctx.db, sheet),
       parameters: allParameters(ctx.db),

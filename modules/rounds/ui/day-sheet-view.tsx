@@ -23,6 +23,8 @@ export interface DaySheetViewProps {
   hindrances: readonly string[];
   signatures: readonly SignatureShown[];
   bounds: Readonly<Record<number, Bounds>>;
+  /** Where a line stands in the round as planned, by reading. */
+  places: Readonly<Record<number, number>>;
   oldValues: Readonly<Record<number, OldValue>>;
   struckOut: readonly StruckOut[];
   parameters: readonly FacilityParameter[];

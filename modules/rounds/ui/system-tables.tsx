@@ -10,14 +10,19 @@ export interface SystemTablesProps {
   lines: readonly SheetLine[];
   parameters: readonly FacilityParameter[];
   bounds: Readonly<Record<number, Bounds>>;
+  /** Where a line stands in the round as planned, by reading; what is in no plan comes last. */
+  places: Readonly<Record<number, number>>;
   names: Names;
   zone: string;
 }
 
-/** What was read, system by system in walking order. */
+/** What was read, system by system in walking order, each in the order in which it is read. */
 export function SystemTables({ lines, ...rest }: SystemTablesProps) {
+  const placeOf = ({ readingId }: SheetLine) => rest.places[readingId] ?? Number.MAX_SAFE_INTEGER;
+  const walked = lines.toSorted((a, b) => placeOf(a) - placeOf(b));
   const bySystem = new Map<string, SheetLine[]>();
-  for (const line of lines) bySystem.set(line.systemCode, [...(bySystem.get(line.systemCode) ?? []), line]);
+  for (const line of lines) bySystem.set(line.systemCode, []);
+  for (const line of walked) bySystem.set(line.systemCode, [...(bySystem.get(line.systemCode) ?? []), line]);
   return (
     <div className="grid gap-6">
       {[...bySystem].map(([code, ofSystem]) => (
@@ -42,7 +47,8 @@ export function SystemTables({ lines, ...rest }: SystemTablesProps) {
 const rowStatus = ({ status }: SheetLine) =>
   status === "watch" || status === "out" || status === "implausible" ? status : undefined;
 
-function SystemTable({ code, lines, parameters, bounds, names, zone }: SystemTablesProps & { code: string }) {
+function SystemTable(props: Omit<SystemTablesProps, "places"> & { code: string }) {
+  const { code, lines, parameters, bounds, names, zone } = props;
   const of = (line: SheetLine) => parameters.find((each) => each.id === line.parameterId);
   const hasPoints = new Set(lines.map((line) => line.pointCode)).size > 1;
   return (

@@ -10,3 +10,19 @@ export function readingUnits(preferred: Readonly<Record<string, string>>): Readi
     volume: VOLUME_UNITS.find((unit) => unit === preferred.volume) ?? "L",
   };
 }
+
+/** From here on litres are many digits for nothing: cubic metres are read. */
+const CUBIC_METRES_FROM_L = 1000;
+
+/**
+ * In which unit is a volume shown to somebody? In the one they chose, else in cubic metres from 1000 L on. For a list ask
+ * with its largest volume, so that one column has one unit.
+ * @example shownVolumeUnit({}, 310_700) === "m³"
+ */
+export function shownVolumeUnit(
+  preferred: Readonly<Record<string, string>>,
+  largestL: number | null,
+): VolumeUnit {
+  const chosen = VOLUME_UNITS.find((unit) => unit === preferred.volume);
+  return chosen ?? ((largestL ?? 0) >= CUBIC_METRES_FROM_L ? "m³" : "L");
+}

@@ -4,7 +4,7 @@ import { may } from "@/modules/access";
 import { getOwnAccount } from "@/modules/identity";
 import { listAreas, listSystems, systemsMay } from "@/modules/systems";
 import { SystemsSetup } from "@/modules/systems/ui/systems-setup";
-import { readingUnits } from "@/modules/systems/ui/volume-units";
+import { shownVolumeUnit } from "@/modules/systems/ui/volume-units";
 
 export const metadata: Metadata = { title: "Systems setup" };
 
@@ -18,7 +18,10 @@ export default async function SystemsSetupPage() {
       systems={systems}
       areas={areas}
       mayManage={may(actor, systemsMay.manageSystems)}
-      volumeUnit={readingUnits(account?.preferredUnits ?? {}).volume}
+      volumeUnit={shownVolumeUnit(
+        account?.preferredUnits ?? {},
+        Math.max(0, ...systems.map((each) => each.volumeL ?? 0)),
+      )}
     />
   );
 }

@@ -1,5 +1,6 @@
 import type { Metadata } from "next";
 import Link from "next/link";
+import { readingsToRead, rowReader } from "@/app/_server/preferred-units";
 import { askPage, pageActor } from "@/app/_server/session";
 import { systemClock } from "@/lib/clock";
 import { settings } from "@/lib/env";
@@ -24,7 +25,7 @@ import {
   WATER_TYPE_WORDS,
 } from "@/modules/systems/model";
 import { EquipmentPanel, SystemVolumeFacts } from "@/modules/systems/ui/system-facts";
-import { readingUnits } from "@/modules/systems/ui/volume-units";
+import { shownVolumeUnit } from "@/modules/systems/ui/volume-units";
 
 type Search = { chart?: string; before?: string };
 type Props = { params: Promise<{ code: string }>; searchParams: Promise<Search> };
@@ -70,7 +71,7 @@ export default async function SystemPage({ params, searchParams }: Props) {
       <SystemHead system={system} incidents={incidents} />
       <div className="grid grid-cols-[minmax(0,1fr)] items-start gap-5 xl:grid-cols-[minmax(0,7fr)_minmax(0,5fr)]">
         <NowPanel
-          rows={rows}
+          rows={rows.map(await rowReader())}
           shown={shown && { pointId: shown.pointId, parameterId: shown.parameter.id }}
           hrefOf={(row) => `${path}?chart=${encodeURIComponent(keyOf(row))}#chart`}
           people={people}
@@ -126,7 +127,7 @@ async function SystemHead({
         figures={
           <SystemVolumeFacts
             sheet={sheet}
-            unit={readingUnits(account?.preferredUnits ?? {}).volume}
+            unit={shownVolumeUnit(account?.preferredUnits ?? {}, sheet.record?.volumeL ?? null)}
             zone={zone}
           />
         }
@@ -243,8 +244,7 @@ async function Readings({
   const path = `/systems/${system.code}`;
   return (
     <RecentReadings
-      readings={shown}
-      parameters={await askPage(listParameters, { includeRetired: true })}
+      {...(await readingsToRead(shown, await askPage(listParameters, { includeRetired: true })))}
       people={people}
       zone={settings().STILLWELL_ZONE}
       newestHref={from.beforeAt === undefined ? null : `${path}#readings`}

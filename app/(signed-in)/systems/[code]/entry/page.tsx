@@ -1,5 +1,6 @@
 import type { Metadata } from "next";
 import Link from "next/link";
+import { rowsToType } from "@/app/_server/preferred-units";
 import { askPage, mustMay, refusePage } from "@/app/_server/session";
 import { systemClock } from "@/lib/clock";
 import { settings } from "@/lib/env";
@@ -10,7 +11,7 @@ import { getOwnAccount, listPersonNames } from "@/modules/identity";
 import { listWatch, measurementsMay } from "@/modules/measurements";
 import { getSystem, listSystems } from "@/modules/systems";
 import { plainVolume } from "@/modules/systems/ui/volume-text";
-import { readingUnits } from "@/modules/systems/ui/volume-units";
+import { shownVolumeUnit } from "@/modules/systems/ui/volume-units";
 import { EntryWithIncidents } from "./entry-with-incidents";
 
 type Props = { params: Promise<{ code: string }> };
@@ -25,12 +26,12 @@ export default async function EntryPage({ params }: Props) {
   if (actor.personId === null || !mayInArea(actor, measurementsMay.record, system.areaId)) {
     return refusePage(actor, measurementsMay.record);
   }
-  const rows = await askPage(listWatch, { systemId: system.id, recent: 20 });
+  const rows = await rowsToType(await askPage(listWatch, { systemId: system.id, recent: 20 }));
   const people = await askPage(listPersonNames, {});
   const account = await askPage(getOwnAccount, {});
   const walk = await askPage(listSystems, { areaId: system.areaId });
   const here = walk.findIndex((each) => each.id === system.id);
-  const { volume } = readingUnits(account?.preferredUnits ?? {});
+  const volume = shownVolumeUnit(account?.preferredUnits ?? {}, system.volumeL);
   const shown = plainVolume(convertByFactor(system.volumeL ?? 0, "L", volume));
   return (
     <EntryWithIncidents
