@@ -1,6 +1,7 @@
 import type { FacilityParameter, ParameterKind, PlausibleBounds } from "@/modules/methods/model";
 
 export { formatNumber, formatValue } from "./rules/format-value";
+export { parameterInUnit, preferredUnit, readingInUnit, rowInUnit } from "./rules/in-unit";
 export { type ShownValue, shownValue } from "./rules/shown-value";
 export type { ParameterKind, PlausibleBounds };
 

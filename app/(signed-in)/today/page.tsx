@@ -2,6 +2,7 @@ import type { Metadata } from "next";
 import { operationalToday } from "@/app/_server/facility-day";
 import { historyWords, recordsOfSubjects } from "@/app/_server/history-words";
 import { personNames } from "@/app/_server/names";
+import { rowReader } from "@/app/_server/preferred-units";
 import { askPage, pageActor } from "@/app/_server/session";
 import { systemClock } from "@/lib/clock";
 import { settings } from "@/lib/env";
@@ -26,7 +27,7 @@ export default async function TodayPage() {
   const actor = await pageActor();
   const names = await personNames();
   const rows = await askPage(listWatch, { recent: 2 });
-  const off = offNow(rows);
+  const off = offNow(rows.map(await rowReader()));
   const isSeen = rows.some((row) => row.recent.length > 0);
   const waiting = await waitsForMe(actor, names);
   const now = systemClock.now();

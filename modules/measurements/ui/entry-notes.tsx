@@ -2,7 +2,8 @@
 import Link from "next/link";
 import { type FormEvent, type ReactNode, useState } from "react";
 import { Button, StatusWord, timeText } from "@/lib/ui";
-import { needsConfirmation } from "../model";
+import { needsConfirmation, parameterInUnit } from "../model";
+import { verdictInUnit } from "../rules/verdict-in-unit";
 import { statusOf } from "./hand-over";
 import { applySlip, shortGround, slipLabel } from "./judge-typed";
 import type { EntryCell } from "./use-entry";
@@ -34,7 +35,10 @@ function TypedNotes({ entry, onDone }: EntryNotesProps) {
   }
   if (verdict.state === "left-to-server") return <p className="text-sm text-ink-3">{verdict.sentence}</p>;
   const { status, side } = verdict.verdict;
-  const ground = shortGround(verdict.verdict, row.parameter.decimals);
+  const { parameter } = row;
+  const { decimals, unit } = parameterInUnit(parameter, draft.unit);
+  const shown = verdictInUnit(verdict.verdict, verdict.value, parameter, unit);
+  const ground = shortGround(shown, decimals, unit !== parameter.unit);
   const isShown = status !== "within" && status !== "none";
   if (!isShown && verdict.slips.length === 0) return null;
   const typed = { text: draft.text, unit: draft.unit, takenAt: 0 };
@@ -47,9 +51,7 @@ function TypedNotes({ entry, onDone }: EntryNotesProps) {
           detail={ground || undefined}
         />
       )}
-      {draft.asked && verdict.mustBeConfirmed && (
-        <p className="text-sm text-ink-2">{verdict.verdict.sentence}</p>
-      )}
+      {draft.asked && verdict.mustBeConfirmed && <p className="text-sm text-ink-2">{shown.sentence}</p>}
       <span className="flex flex-wrap justify-end gap-2">
         {verdict.slips.map((slip) => (
           <Button

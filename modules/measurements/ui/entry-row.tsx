@@ -1,13 +1,14 @@
 "use client";
 import { type ReactNode, useId } from "react";
-import { agoText, Quantity, WellStrip } from "@/lib/ui";
+import { agoText, WellStrip } from "@/lib/ui";
 import { unitLabel } from "@/lib/units/factors";
-import type { RecentReading } from "../model";
+import { type RecentReading, rowInUnit, type WatchRow } from "../model";
+import { inUnit } from "../rules/in-unit";
 import { AnswerButtons, answersOf } from "./answer-buttons";
 import { EntryBox } from "./entry-box";
 import { EntryNotes } from "./entry-notes";
 import { statusOf } from "./hand-over";
-import { inUnit } from "./judge-typed";
+import { ReadingFigure } from "./reading-figure";
 import type { EntryCell } from "./use-entry";
 
 interface EntryRowProps {
@@ -91,11 +92,13 @@ function SentBox({ entry: { item, row } }: { entry: EntryCell }) {
   );
 }
 
-function Strip({ entry: { row, verdict, item, isOpen } }: { entry: EntryCell }) {
+/** The strip in the unit in which the value is typed, where a factor is enough; else in the canonical one. */
+function Strip({ entry: { row: canonical, draft, verdict, item, isOpen } }: { entry: EntryCell }) {
+  const row = rowInUnit(canonical, draft.unit);
   const bounds = row.limits.state === "in-force" ? row.limits.bounds : {};
   const { decimals, name, unit, plausible } = row.parameter;
   const judged = isOpen && verdict.state === "judged" ? verdict : null;
-  const value = isOpen ? judged?.value.value : item?.canonical;
+  const value = (isOpen ? judged?.value.value : item?.canonical) ?? null;
   const status = isOpen ? judged?.verdict.status : ((item && statusOf(item)) ?? undefined);
   const previous = row.recent.find((each) => each.value !== null && each.qualifier === "")?.value ?? null;
   return (
@@ -105,7 +108,7 @@ function Strip({ entry: { row, verdict, item, isOpen } }: { entry: EntryCell }) 
         name={name}
         unit={unitLabel(unit)}
         decimals={decimals}
-        value={value ?? null}
+        value={value === null ? null : inUnit(value, canonical.parameter.unit, unit)}
         previous={previous}
         {...(status ? { status } : {})}
         target={bounds.target}
@@ -121,34 +124,22 @@ function Strip({ entry: { row, verdict, item, isOpen } }: { entry: EntryCell }) 
 }
 
 function LastValue({ entry, now }: { entry: EntryCell; now: number }) {
-  const last = entry.row.recent[0];
+  const shown = rowInUnit(entry.row, entry.draft.unit);
+  const last = shown.recent[0];
   if (!last) return <>not read yet</>;
   return (
     <>
-      last <LastFigure entry={entry} last={last} /> <span aria-hidden="true">·</span>{" "}
+      last <LastFigure entry={entry} row={shown} last={last} /> <span aria-hidden="true">·</span>{" "}
       <span className="whitespace-nowrap">{agoText(last.takenAt, now)}</span>
     </>
   );
 }
 
 /** The last value in the unit in which the next one is typed, where a factor is enough; else in the canonical one. */
-function LastFigure({ entry, last }: { entry: EntryCell; last: RecentReading }) {
-  const { parameter } = entry.row;
+function LastFigure({ entry, row, last }: { entry: EntryCell; row: WatchRow; last: RecentReading }) {
   if (last.answer !== null) {
     const choice = answersOf(entry).find((each) => each.code === last.answer);
     return <b className="font-semibold text-ink-2">{choice?.label ?? last.answer}</b>;
   }
-  if (last.value === null)
-    return <b className="num font-semibold text-ink-2">{last.qualifier || last.typedText}</b>;
-  const wanted = inUnit(last.value, parameter.unit, entry.draft.unit);
-  const unit = wanted === null ? parameter.unit : entry.draft.unit;
-  return (
-    <Quantity
-      className="font-semibold text-ink-2"
-      value={wanted ?? last.value}
-      decimals={parameter.decimals}
-      unit={unitLabel(unit)}
-      qualifier={last.qualifier}
-    />
-  );
+  return <ReadingFigure className="font-semibold text-ink-2" reading={last} parameter={row.parameter} />;
 }

@@ -60,11 +60,11 @@ const rows = [
   }),
 ];
 
-function show() {
+function show(shown = rows) {
   render(
     <EntrySheet
       system={{ code: "KELP-01", name: "Kelp forest" }}
-      rows={rows}
+      rows={shown}
       people={[]}
       personId={personId}
       zone="Europe/London"
@@ -120,6 +120,36 @@ describe("entry on a system's page", () => {
         body: { text: "The chiller was off." },
       }),
     );
+  });
+
+  // 1.8 × 13.4 + 32 = 56.12 °F; 12 to 15 °C = 53.6 to 59.0 °F; 60 °F is above 59.0 °F and below 15.6 °C
+  it("shows last value, strip and limits in the unit that is typed, and sends what was typed", async () => {
+    const inFahrenheit = {
+      ...aWatchRow({
+        acceptedUnits: ["°C", "°F"],
+        bounds: { toleranceLow: 12, toleranceHigh: 15 },
+        recent: [aReading({ value: 13.4, takenAt: NOW - 25 * HOUR })],
+      }),
+      unit: "°F",
+    };
+    show([inFahrenheit]);
+    expect(line("Temperature").textContent).toContain("last 56.1°F");
+    expect(screen.getByRole("img").getAttribute("aria-label")).toBe(
+      "Temperature no value; tolerance 53.6 to 59.0; last 56.1",
+    );
+    fireEvent.change(box("Temperature"), { target: { value: "60" } });
+    expect(line("Temperature").textContent).toContain("above 59.0");
+    expect(screen.getByRole("img").getAttribute("aria-label")).toContain("Temperature 60.0 °F, out of");
+    fireEvent.keyDown(box("Temperature"), { key: "Enter" });
+    expect(line("Temperature").textContent).toContain("upper tolerance limit (59.0\u00a0°F)");
+    fireEvent.change(box("Temperature"), { target: { value: "56.1" } });
+    fireEvent.keyDown(box("Temperature"), { key: "Enter" });
+    expect(requests[0]?.body.readings).toMatchObject([{ typedText: "56.1", typedUnit: "°F" }]);
+    await waitFor(() => expect(line("Temperature").textContent).toContain("sent"));
+    // another unit picked in the row: the row follows
+    fireEvent.click(screen.getByRole("button", { name: "Measure again" }));
+    fireEvent.change(screen.getByRole("combobox", { name: /Unit of/ }), { target: { value: "°C" } });
+    expect(line("Temperature").textContent).toContain("last 13.4°C");
   });
 
   it("offers 8.12 for 81.2 and leaves it to the person", () => {

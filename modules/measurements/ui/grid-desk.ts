@@ -1,3 +1,4 @@
+import { inUnit } from "../rules/in-unit";
 import {
   type CellKey,
   cellKey,
@@ -17,7 +18,7 @@ import {
 } from "./grid-model";
 import { type CellView, emptyView, itemView, type Need } from "./grid-view";
 import { alsoRead, lastItem, type Taken, toParcel } from "./hand-over";
-import { inUnit, shortGround, type TypedVerdict } from "./judge-typed";
+import { shortGround, type TypedVerdict } from "./judge-typed";
 import type { Outbox } from "./outbox";
 
 /** What became of a value when Enter or Tab was pressed. */

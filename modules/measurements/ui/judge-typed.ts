@@ -1,6 +1,8 @@
-import { convertByFactor, UnitError, unitLabel } from "@/lib/units/factors";
+import { unitLabel } from "@/lib/units/factors";
 import { needsConfirmation, type ReadingValue, type StatusVerdict, type WatchRow } from "../model";
 import { greatestChange24h, type TimedValue } from "../rules/change-24h";
+import { formatPair } from "../rules/format-value";
+import { inUnit } from "../rules/in-unit";
 import { parseValue } from "../rules/parse-value";
 import { type Slip, suggestSlips } from "../rules/slips";
 import { judgeReading } from "../rules/status";
@@ -29,17 +31,6 @@ export type TypedVerdict =
       /** What else may have been meant; shown as buttons, never applied by itself. */
       readonly slips: readonly Slip[];
     };
-
-/** A value in another unit where a factor is enough; null where it needs more than that. */
-export function inUnit(value: number, from: string | null, to: string | null): number | null {
-  if (from === null || to === null || from === to) return value;
-  try {
-    return convertByFactor(value, from, to);
-  } catch (error) {
-    if (error instanceof UnitError) return null;
-    throw error;
-  }
-}
 
 /**
  * What is the status of what is being typed? The same rule as on the server, with the limits that came with the row and its
@@ -127,14 +118,22 @@ export function slipLabel(typed: Typed, slip: Slip): string {
 
 /**
  * Why a value is off, in three or four words for the line under a box: "below 6.5", "above 18.0",
- * "changed by 1.2 in 24 h". Empty where the status says it all.
+ * "changed by 1.2 in 24 h". Empty where the status says it all. A limit stands there with all the digits that it was
+ * given; one that was `converted` with as many as it takes to tell it from the value.
  */
-export function shortGround(verdict: StatusVerdict, decimals: number): string {
+export function shortGround(verdict: StatusVerdict, decimals: number, converted = false): string {
   const reason = verdict.reasons[0];
   if (!reason || !("limit" in reason)) return "";
   if (reason.code === "bound-does-not-decide") return "";
-  if (reason.code === "change-too-great") return `changed by ${fixed(reason.change, decimals)} in 24 h`;
-  return `${reason.code.startsWith("below") ? "below" : "above"} ${fixed(reason.limit, decimals)}`;
+  if (reason.code === "change-too-great") {
+    const { change, limit } = reason;
+    const text = converted ? formatPair(change, limit, decimals)[0] : fixed(change, decimals);
+    return `changed by ${text} in 24 h`;
+  }
+  const limit = converted
+    ? formatPair(reason.value, reason.limit, decimals)[1]
+    : fixed(reason.limit, decimals);
+  return `${reason.code.startsWith("below") ? "below" : "above"} ${limit}`;
 }
 
 /** At least the parameter's decimals, more where the number has them. */

@@ -2,6 +2,7 @@ import { Quantity } from "@/lib/ui";
 import { unitLabel } from "@/lib/units/factors";
 import type { FacilityParameter } from "@/modules/methods/model";
 import type { Qualifier } from "../model";
+import { formatValue } from "../rules/format-value";
 
 type Figure = {
   readonly value: number | null;
@@ -28,12 +29,21 @@ export function ReadingFigure({
     return <span className={className}>{label}</span>;
   }
   if (value === null) return <span className={`num ${className}`}>{qualifier || typedText}</span>;
+  if (qualifier !== "") {
+    // a detection limit keeps its digits: "<0.05" is not "<0.1"
+    const unit = withUnit ? unitLabel(parameter.unit) : "";
+    return (
+      <span className={`num ${className}`}>
+        {formatValue({ value, qualifier, text: typedText }, parameter.decimals)}
+        {unit !== "" && <span className="unit">{unit}</span>}
+      </span>
+    );
+  }
   return (
     <Quantity
       className={className}
       value={value}
       decimals={parameter.decimals}
-      qualifier={qualifier}
       {...(withUnit ? { unit: unitLabel(parameter.unit) } : {})}
     />
   );
