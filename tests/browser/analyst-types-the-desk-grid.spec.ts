@@ -1,5 +1,6 @@
 import type { Locator, Page } from "@playwright/test";
 import { expect, test } from "../support/browser";
+import { withinRow } from "../support/within-row";
 
 test.use({ signedInAs: "analyst" });
 
@@ -20,7 +21,7 @@ async function openSheet(page: Page): Promise<void> {
   await expect(page.locator(".desk-cell").first()).toBeVisible();
 }
 
-const counts = (page: Page) => page.getByRole("status").filter({ hasText: "not sent" });
+const counts = (page: Page) => page.getByRole("status").filter({ hasText: /\d+ waits? for you/ });
 const focused = (page: Page): Locator => page.locator(".ag-cell-focus");
 const firstCell = (page: Page) => page.locator('.ag-row[row-index="0"] .ag-cell:has(.desk-last)').first();
 
@@ -79,9 +80,9 @@ test("a block from a spreadsheet is held until each value can be used, then goes
   page,
 }) => {
   await openSheet(page);
-  const cell = firstCell(page);
-  const good = (await cell.locator(".desk-last").innerText()).replace("\u2212", "-");
-  await cell.click();
+  await firstCell(page).click();
+  const [systemCode, parameterName] = (await page.locator(".desk-cell-line b").innerText()).split(", ");
+  const { value: good } = await withinRow(page.request, { systemCode, parameterName });
   await page.evaluate((text) => {
     const clipboardData = new DataTransfer();
     clipboardData.setData("text/plain", text);

@@ -1,45 +1,27 @@
 import type { Page } from "@playwright/test";
 import { expect, test } from "../support/browser";
+import { withinRow } from "../support/within-row";
 
 test.use({ signedInAs: "aquarist", viewport: { width: 768, height: 1024 } });
 
-/** The code of a system that this person may enter readings for, as the product itself says it. */
-async function someSystem(page: Page): Promise<string> {
-  const answer = await page.request.get("/api/v1/watch?recent=1");
-  expect(answer.ok()).toBe(true);
-  const { data } = (await answer.json()) as {
-    data: {
-      systemCode: string;
-      systemState: string;
-      parameter: { kind: string };
-      recent: { value: number | null }[];
-    }[];
-  };
-  const found = data.find((row) => row.parameter.kind === "number" && row.recent[0]?.value != null);
-  if (!found) throw new Error("the demonstration has something to read in this person's area");
-  return found.systemCode;
-}
+const counts = (page: Page) => page.getByRole("status").filter({ hasText: /\d+ waits? for you/ });
 
-const counts = (page: Page) => page.getByRole("status").filter({ hasText: "not sent" });
-
-/** The first line with a number box and a last value, and that value. */
-async function firstNumber(page: Page) {
+/** Opens the sheet of a system with something that can be read within; its line and its box. */
+async function openSheet(page: Page) {
+  const row = await withinRow(page.request);
+  await page.goto(`/systems/${row.systemCode}/entry`);
   const line = page
+    .getByRole("region", { name: row.systemCode, exact: true })
     .getByRole("listitem")
-    .filter({ has: page.locator('input[inputmode="decimal"]'), hasText: /last [\d−]/ })
-    .first();
-  const last = (await line.getByText(/^last /).innerText()).replace("−", "-");
-  const value = /last\s+(-?[\d.]+)/.exec(last)?.[1] ?? "";
-  return { line, value, box: line.getByRole("textbox") };
+    .filter({ has: page.getByRole("heading", { name: row.parameterName, exact: true }) });
+  return { ...row, line, box: line.getByRole("textbox") };
 }
 
 test("a value is typed with the decimal keypad, judged at once, sent on Enter, and the next box is in focus", async ({
   page,
 }) => {
-  const code = await someSystem(page);
-  await page.goto(`/systems/${code}/entry`);
-  await expect(page.getByRole("heading", { level: 1 })).toContainText(code);
-  const { box, value } = await firstNumber(page);
+  const { systemCode, box, value } = await openSheet(page);
+  await expect(page.getByRole("heading", { level: 1 })).toContainText(systemCode);
   await expect(box).toHaveAttribute("inputmode", "decimal");
   const height = (await box.locator("xpath=..").boundingBox())?.height ?? 0;
   expect(height).toBeGreaterThanOrEqual(54);
@@ -52,9 +34,7 @@ test("a value is typed with the decimal keypad, judged at once, sent on Enter, a
 test("a value that cannot be is not sent until somebody says that it really shows this; then it is explained", async ({
   page,
 }) => {
-  const code = await someSystem(page);
-  await page.goto(`/systems/${code}/entry`);
-  const { box } = await firstNumber(page);
+  const { box } = await openSheet(page);
   await box.fill("99999");
   await page.keyboard.press("Enter");
   await page.keyboard.press("Enter");
@@ -73,9 +53,7 @@ test("a value typed without a network is kept over a reload and sent when the ne
   expectConsoleError,
 }) => {
   expectConsoleError(/net::ERR_|Failed to load resource/);
-  const code = await someSystem(page);
-  await page.goto(`/systems/${code}/entry`);
-  const { box, value } = await firstNumber(page);
+  const { box, value } = await openSheet(page);
   await page.route("**/api/v1/readings", (route) => route.abort("internetdisconnected"));
   await box.fill(value);
   await page.keyboard.press("Enter");
@@ -90,20 +68,20 @@ test("a value typed without a network is kept over a reload and sent when the ne
 });
 
 test("a reading is corrected with a reason; the old value stays beside the new one", async ({ page }) => {
-  const code = await someSystem(page);
-  await page.goto(`/systems/${code}/entry`);
-  const { box, value } = await firstNumber(page);
+  const { line, box, value, otherValue } = await openSheet(page);
   await box.fill(value);
   await page.keyboard.press("Enter");
-  await page.getByRole("link", { name: "Correct…" }).first().click();
+  await line.getByRole("link", { name: "Correct…" }).click();
   await page.getByRole("button", { name: "Correct…" }).click();
   const dialog = page.getByRole("dialog", { name: "Correct this reading" });
   await dialog.getByRole("button", { name: "Put the new value beside it" }).click();
   await expect(dialog.getByText("Type the new value.")).toBeVisible();
-  await dialog.getByRole("textbox", { name: "New value" }).fill(`${value}1`);
+  await dialog.getByRole("textbox", { name: "New value" }).fill(otherValue);
   await dialog.getByRole("textbox", { name: "Why" }).fill("Misread the last digit.");
   await dialog.getByRole("button", { name: "Put the new value beside it" }).click();
   const versions = page.getByRole("table", { name: "Versions of this reading" });
   await expect(versions.getByRole("row")).toHaveCount(3);
+  await expect(versions).toContainText(value);
+  await expect(versions).toContainText(otherValue);
   await expect(versions).toContainText("Misread the last digit.");
 });
