@@ -1,7 +1,7 @@
 import { mkdirSync, rmSync, writeFileSync } from "node:fs";
 import { dirname } from "node:path";
 import { findBrowser } from "../../scripts/find-browser.mjs";
-import { DEMO_ROLES, SERVER_URL, signedInStateFile } from "../support/browser";
+import { DEMO_ROLES, SERVER_DATA, SERVER_URL, signedInStateFile } from "../support/browser";
 import { demoPerson } from "../support/demo-copy";
 import { signIn } from "../support/sign-in";
 import { startTestServer } from "../support/test-server";
@@ -11,6 +11,7 @@ export default async function globalSetup(): Promise<() => Promise<void>> {
   if (findBrowser() === undefined) throw new Error("no chromium was found: npm test installs Debian's");
   const server = await startTestServer("browser");
   process.env[SERVER_URL] = server.url;
+  process.env[SERVER_DATA] = server.dataFolder;
   try {
     for (const role of DEMO_ROLES) await keepSignedIn(server.url, role);
   } catch (error) {

@@ -5,6 +5,9 @@ import { root } from "../../scripts/installed.mjs";
 /** Name of the variable that tells the tests' workers where the server is. */
 export const SERVER_URL = "STILLWELL_TEST_URL";
 
+/** Name of the variable that tells them where its data is, to read addresses from. */
+export const SERVER_DATA = "STILLWELL_TEST_DATA";
+
 export const DEMO_ROLES = [
   "aquarist",
   "operator",
