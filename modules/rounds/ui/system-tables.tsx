@@ -54,6 +54,7 @@ function SystemTable(props: Omit<SystemTablesProps, "places"> & { code: string }
   return (
     <DataTable
       caption={`Readings of ${code}`}
+      className="xl:[&_table]:table-fixed"
       rows={lines}
       rowKey={(line) => line.readingId}
       rowStatus={rowStatus}
@@ -69,7 +70,7 @@ function SystemTable(props: Omit<SystemTablesProps, "places"> & { code: string }
                 {hasPoints && <span className="font-normal">, {line.pointCode.toLowerCase()}</span>}
               </Link>
               <span className="block font-normal sm:hidden">
-                <LineStatus line={line} /> <Taken line={line} names={names} zone={zone} />
+                <LineStatus line={line} /> · <Taken line={line} names={names} zone={zone} />
               </span>
             </>
           ),

@@ -40,6 +40,39 @@ describe("day sheets in a list", () => {
     }
   });
 
+  it("know the order of the round, whatever the order in which the lines are signed", () => {
+    const { bench, water, ines, joe } = begin();
+    bench.run(ines, planWatch, {
+      pointId: water.pointId,
+      items: [
+        { parameterId: water.temperatureId, everyDays: 1 },
+        { parameterId: water.ammoniaId, everyDays: 1 },
+      ],
+    });
+    bench.run(joe, recordReadings, {
+      readings: [
+        water.reading(water.ammoniaId, "0.02", NOON),
+        water.reading(water.temperatureId, "13.4", NOON),
+      ],
+    });
+    const shown = () => {
+      const { sheet, places } = bench.ask(ines, getDaySheet, { areaId: water.areaId, onDay: "2026-03-02" });
+      const walked = sheet.lines.toSorted((a, b) => (places[a.readingId] ?? 9) - (places[b.readingId] ?? 9));
+      return { hash: sheet.contentHash, order: walked.map((line) => line.parameterId) };
+    };
+    const before = shown();
+    expect(before.order).toEqual([water.temperatureId, water.ammoniaId]);
+    bench.run(ines, planWatch, {
+      pointId: water.pointId,
+      items: [
+        { parameterId: water.ammoniaId, everyDays: 1 },
+        { parameterId: water.temperatureId, everyDays: 1 },
+      ],
+    });
+    // A new plan shows the lines in a new order and breaks no signature.
+    expect(shown()).toEqual({ hash: before.hash, order: [water.ammoniaId, water.temperatureId] });
+  });
+
   it("say which day is over, and which was reviewed", () => {
     const { bench, ines, read, list } = begin();
     read("13.4", NOON);
