@@ -8,4 +8,4 @@ export {
   type Scope,
   SYSTEM_ACTOR,
 } from "./model";
-export { definePermissions } from "./permissions";
+export { definePermissions, EVERY_ROLE_AQUARIST_IN_OWN_AREAS } from "./permissions";

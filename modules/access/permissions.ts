@@ -35,3 +35,15 @@ export function definePermissions<const Table extends Record<string, PermissionR
     readonly [Name in keyof Table]: Permission<IsBounded<Table[Name]>>;
   };
 }
+
+/** Every role, an aquarist in their own areas: for what tells of the water of an area. */
+export const EVERY_ROLE_AQUARIST_IN_OWN_AREAS = {
+  aquarist: "own areas",
+  operator: "everywhere",
+  analyst: "everywhere",
+  lead: "everywhere",
+  veterinarian: "everywhere",
+  auditor: "everywhere",
+  admin: "everywhere",
+  reader: "everywhere",
+} as const satisfies RoleGrants;

@@ -20,7 +20,7 @@ export { IntakeCache } from "./intake-cache";
 export { limitsInForce } from "./limits";
 export { listLimitBoard } from "./queries/list-limit-board";
 export { getLimitWorkbook, listLimits, listLimitTemplates, listLimitWorkbooks } from "./queries/list-limits";
-export { getReading, getSeries, listReadings } from "./queries/list-readings";
+export { getReading, listReadings } from "./queries/list-readings";
 export { listWatch } from "./queries/list-watch";
 export { listWatchPlan } from "./queries/list-watch-plan";
 export { getSeriesFrame, listSeriesSlice } from "./queries/series";

@@ -1,18 +1,9 @@
-import { definePermissions } from "@/modules/access";
+import { definePermissions, EVERY_ROLE_AQUARIST_IN_OWN_AREAS } from "@/modules/access";
 
 export const qualityMay = definePermissions("quality", {
   read: {
     says: "see incidents",
-    roles: {
-      aquarist: "own areas",
-      operator: "everywhere",
-      analyst: "everywhere",
-      lead: "everywhere",
-      veterinarian: "everywhere",
-      auditor: "everywhere",
-      admin: "everywhere",
-      reader: "everywhere",
-    },
+    roles: EVERY_ROLE_AQUARIST_IN_OWN_AREAS,
   },
   handle: {
     says: "open incidents and work on them",

@@ -1,18 +1,9 @@
-import { definePermissions } from "@/modules/access";
+import { definePermissions, EVERY_ROLE_AQUARIST_IN_OWN_AREAS } from "@/modules/access";
 
 export const roundsMay = definePermissions("rounds", {
   read: {
     says: "see day sheets",
-    roles: {
-      aquarist: "own areas",
-      operator: "everywhere",
-      analyst: "everywhere",
-      lead: "everywhere",
-      veterinarian: "everywhere",
-      auditor: "everywhere",
-      admin: "everywhere",
-      reader: "everywhere",
-    },
+    roles: EVERY_ROLE_AQUARIST_IN_OWN_AREAS,
   },
   review: { says: "review day sheets", roles: { lead: "everywhere" } },
 });

@@ -1,18 +1,9 @@
-import { definePermissions } from "@/modules/access";
+import { definePermissions, EVERY_ROLE_AQUARIST_IN_OWN_AREAS } from "@/modules/access";
 
 export const systemsMay = definePermissions("systems", {
   read: {
     says: "see areas, systems, points and volumes",
-    roles: {
-      aquarist: "own areas",
-      operator: "everywhere",
-      analyst: "everywhere",
-      lead: "everywhere",
-      veterinarian: "everywhere",
-      auditor: "everywhere",
-      admin: "everywhere",
-      reader: "everywhere",
-    },
+    roles: EVERY_ROLE_AQUARIST_IN_OWN_AREAS,
   },
   manageAreas: { says: "set up sites and areas", roles: { admin: "everywhere" } },
   manageSystems: {

@@ -5,57 +5,10 @@ import { defineQuery } from "@/modules/audit";
 import { getParameter } from "@/modules/methods";
 import { pointDirectory } from "@/modules/systems";
 import { measurementsMay } from "../abilities";
-import { approvedVersions } from "../limits";
 import { explanation, judgement, reading, readingInForce } from "../schema";
 
 const id = z.coerce.number().int().positive();
 const moment = z.coerce.number().int();
-
-/** The series of a point and parameter, oldest first: what a chart and its table show. */
-export const getSeries = defineQuery({
-  name: "getSeries",
-  permission: measurementsMay.read,
-  input: z.strictObject({
-    pointId: id,
-    parameterId: id,
-    fromAt: moment.default(0),
-    toAt: moment.default(8.64e15),
-  }),
-  run(ctx, { pointId, parameterId, fromAt, toAt }) {
-    const place = ctx.db.select().from(pointDirectory).where(eq(pointDirectory.pointId, pointId)).get();
-    if (!place || (ctx.areaIds !== null && !ctx.areaIds.includes(place.areaId))) throw notFound("such point");
-    const readings = ctx.db
-      .select({
-        id: readingInForce.id,
-        takenAt: readingInForce.takenAt,
-        takenBy: readingInForce.takenBy,
-        value: readingInForce.value,
-        qualifier: readingInForce.qualifier,
-        answer: readingInForce.answer,
-        typedText: readingInForce.typedText,
-        typedUnit: readingInForce.typedUnit,
-        status: readingInForce.status,
-        side: readingInForce.side,
-        sentence: readingInForce.sentence,
-        methodId: readingInForce.methodId,
-        instrumentId: readingInForce.instrumentId,
-        note: readingInForce.note,
-        supersedesId: readingInForce.supersedesId,
-      })
-      .from(readingInForce)
-      .where(
-        and(
-          eq(readingInForce.pointId, pointId),
-          eq(readingInForce.parameterId, parameterId),
-          gte(readingInForce.takenAt, fromAt),
-          lt(readingInForce.takenAt, toAt),
-        ),
-      )
-      .orderBy(asc(readingInForce.takenAt), asc(readingInForce.id))
-      .all();
-    return { place, readings, limits: approvedVersions(ctx.db, pointId, parameterId) };
-  },
-});
 
 /** Readings in force, newest first, for lists; keyset paging by the moment taken and the id. */
 export const listReadings = defineQuery({

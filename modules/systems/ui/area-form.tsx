@@ -1,8 +1,7 @@
 "use client";
-import { Field, Select, sendCommand, TextInput, useProblemForm } from "@/lib/ui";
+import { Field, FormDialog, Select, sendCommand, TextInput, useProblemForm } from "@/lib/ui";
 import { areaFormInput, createSiteInput } from "../input";
 import { type AreaRow, BIOSECURITY_LEVELS } from "../model";
-import { FormDialog } from "./form-dialog";
 
 type Done = { onClose: () => void; onDone: (text: string) => void };
 

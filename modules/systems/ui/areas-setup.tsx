@@ -1,9 +1,8 @@
 "use client";
 import { useState } from "react";
-import { Button, DataTable, EmptyState, Notice, PageHead } from "@/lib/ui";
+import { Button, DataTable, EmptyState, Notice, PageHead, useDone } from "@/lib/ui";
 import type { AreaRow, SiteRow } from "../model";
 import { AreaForm, SiteForm } from "./area-form";
-import { useDone } from "./use-done";
 
 type Open = { kind: "site" } | { kind: "area"; area: AreaRow | null } | null;
 

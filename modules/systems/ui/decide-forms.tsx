@@ -1,8 +1,7 @@
 "use client";
-import { Checkbox, Field, Notice, sendCommand, Textarea, useProblemForm } from "@/lib/ui";
+import { Checkbox, Field, FormDialog, Notice, sendCommand, Textarea, useProblemForm } from "@/lib/ui";
 import { approvalFormInput, reasonFormInput } from "../input";
 import type { DeterminationRow, VolumeUnit } from "../model";
-import { FormDialog } from "./form-dialog";
 import { VolumeQuantity } from "./volume-quantity";
 
 type DecideProps = {

@@ -1,5 +1,5 @@
 "use client";
-import { Field, Select, sendCommand, Textarea, TextInput, useProblemForm } from "@/lib/ui";
+import { Field, FormDialog, Select, sendCommand, Textarea, TextInput, useProblemForm } from "@/lib/ui";
 import { equipmentFormInput } from "../input";
 import {
   EQUIPMENT_KIND_WORDS,
@@ -9,7 +9,6 @@ import {
   SYSTEM_STATES,
   type SystemRow,
 } from "../model";
-import { FormDialog } from "./form-dialog";
 import { wordOptions } from "./options";
 
 type EquipmentFormProps = {

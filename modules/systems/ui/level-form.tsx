@@ -2,6 +2,7 @@
 import {
   Checkbox,
   Field,
+  FormDialog,
   Notice,
   NumberInput,
   Select,
@@ -11,7 +12,6 @@ import {
 } from "@/lib/ui";
 import { levelFormInput } from "../input";
 import { LENGTH_UNITS, type SystemRow, type VolumeSheet } from "../model";
-import { FormDialog } from "./form-dialog";
 
 type LevelFormProps = {
   sheet: VolumeSheet;

@@ -1,8 +1,7 @@
 "use client";
-import { Checkbox, Field, Select, sendCommand, TextInput, useProblemForm } from "@/lib/ui";
+import { Checkbox, Field, FormDialog, Select, sendCommand, TextInput, useProblemForm } from "@/lib/ui";
 import { pointFormInput } from "../input";
 import { POINT_KIND_WORDS, POINT_KINDS, type PointRow, type SystemRow } from "../model";
-import { FormDialog } from "./form-dialog";
 import { wordOptions } from "./options";
 
 type PointFormProps = {

@@ -1,5 +1,5 @@
 "use client";
-import { Field, Select, sendCommand, Textarea, TextInput, useProblemForm } from "@/lib/ui";
+import { Field, FormDialog, Select, sendCommand, Textarea, TextInput, useProblemForm } from "@/lib/ui";
 import { reasonFormInput, systemFormInput } from "../input";
 import {
   type AreaRow,
@@ -10,7 +10,6 @@ import {
   WATER_TYPE_WORDS,
   WATER_TYPES,
 } from "../model";
-import { FormDialog } from "./form-dialog";
 import { wordOptions } from "./options";
 
 const WORKING_STATES = ["in-service", "out-of-service"] as const;

@@ -1,7 +1,7 @@
 "use client";
 import { useRouter } from "next/navigation";
 import { useState } from "react";
-import { Button, DataTable, LinkButton, Notice, PageHead, Panel, TimeText } from "@/lib/ui";
+import { Button, DataTable, LinkButton, Notice, PageHead, Panel, TimeText, useDone } from "@/lib/ui";
 import {
   type AreaRow,
   EQUIPMENT_KIND_WORDS,
@@ -17,7 +17,6 @@ import { EquipmentForm } from "./equipment-form";
 import { capital } from "./options";
 import { PointForm } from "./point-form";
 import { RetireForm, SystemForm } from "./system-form";
-import { useDone } from "./use-done";
 
 type Open =
   | { kind: "system" }

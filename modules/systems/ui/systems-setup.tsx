@@ -2,7 +2,7 @@
 import Link from "next/link";
 import { useRouter } from "next/navigation";
 import { useState } from "react";
-import { Button, type DataColumn, DataTable, EmptyState, PageHead, Quantity } from "@/lib/ui";
+import { Button, type DataColumn, DataTable, EmptyState, PageHead, Quantity, useDone } from "@/lib/ui";
 import { convertByFactor } from "@/lib/units/factors";
 import {
   type AreaRow,
@@ -13,7 +13,6 @@ import {
   WATER_TYPE_WORDS,
 } from "../model";
 import { SystemForm } from "./system-form";
-import { useDone } from "./use-done";
 import { plainVolume } from "./volume-text";
 
 type SystemsSetupProps = {

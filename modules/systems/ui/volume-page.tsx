@@ -1,6 +1,6 @@
 "use client";
 import { useState } from "react";
-import { Button, Facts, LinkButton, Notice, numberText, PageHead, TimeText } from "@/lib/ui";
+import { Button, Facts, LinkButton, Notice, numberText, PageHead, TimeText, useDone } from "@/lib/ui";
 import { convertByFactor } from "@/lib/units/factors";
 import type { DeterminationRow, OperatingLevelRow, SystemRow, VolumeSheet } from "../model";
 import { ApproveForm, DeclineForm } from "./decide-forms";
@@ -8,7 +8,6 @@ import { DeterminationList } from "./determination-list";
 import { GeometryEditor } from "./geometry-editor";
 import { LevelForm } from "./level-form";
 import { TracerForm } from "./tracer-form";
-import { useDone } from "./use-done";
 import { VolumeQuantity } from "./volume-quantity";
 import type { ReadingUnits } from "./volume-units";
 
