@@ -69,6 +69,8 @@ function StaffList({ items, here, wetFrom, foot = false, rows, onFollow }: Staff
           <li key={item.href} data-wet={wet} data-here={isHere}>
             <Link
               href={item.href}
+              // A page is asked for when somebody goes there: a menu that fetches all of them loads the server for nothing.
+              prefetch={false}
               className="staff-link"
               aria-current={isHere ? "page" : undefined}
               onClick={onFollow}
