@@ -35,7 +35,7 @@ export function preferredUnit(
 /**
  * With how many decimals is a value shown in another unit? The fewest that are no coarser than the canonical ones:
  * a step of the last canonical digit is never hidden. 0 to 9.
- * @example decimalsIn(1, "°C", "°F") // => 1 (0.1 °C is 0.18 °F)
+ * @example decimalsIn(1, "°C", "°F") // => 1
  */
 export function decimalsIn(decimals: number, from: string | null, to: string | null): number {
   const [zero, one] = [inUnit(0, from, to), inUnit(1, from, to)];
