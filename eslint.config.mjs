@@ -121,7 +121,7 @@ export default defineConfig([
   },
   {
     name: "stillwell/default exports where a framework asks for them",
-    files: [...CONFIGS, "tests/browser/global-setup.ts", "tests/bench/bare-app/**"],
+    files: [...CONFIGS, "tests/browser/global-setup.ts"],
     rules: { "no-restricted-syntax": "off" },
   },
   {

@@ -32,11 +32,11 @@ export function freePort() {
 
 /**
  * Starts the built server as one process, known by its pid.
- * @param {{ port: number, host?: string, env: Record<string, string | undefined>, stdio?: "inherit" | "ignore" | number, folder?: string }} how
+ * @param {{ port: number, host?: string, env: Record<string, string | undefined>, stdio?: "inherit" | "ignore" | number }} how
  * @returns {import("node:child_process").ChildProcess}
  */
-export function spawnServer({ port, host, env, stdio = "inherit", folder = root }) {
-  const args = ["node_modules/next/dist/bin/next", "start", folder, "-p", String(port)];
+export function spawnServer({ port, host, env, stdio = "inherit" }) {
+  const args = ["node_modules/next/dist/bin/next", "start", "-p", String(port)];
   if (host !== undefined) args.push("-H", host);
   return spawn(process.execPath, args, {
     cwd: root,

@@ -1,16 +1,13 @@
 /**
  * Fifty people submitting readings, one after the other each, for a bounded number of requests; beside it in the same run
- * a bare route handler of the same framework and a bare better-sqlite3 insert, so that ratios can be read on any machine.
+ * a route of the same server that writes nothing and a bare better-sqlite3 insert, so that ratios can be read on any machine.
  * Needs a build: `npm run build`, then `npx tsx --conditions=react-server tests/bench/fifty-people.ts`. Loopback only.
  */
-import { spawnSync } from "node:child_process";
 import { randomUUID } from "node:crypto";
 import { mkdtempSync, rmSync } from "node:fs";
 import { tmpdir } from "node:os";
 import path from "node:path";
 import BetterSqlite3 from "better-sqlite3";
-import { root } from "../../scripts/installed.mjs";
-import { freePort, spawnServer, stopServer, waitUntilReady } from "../../scripts/serve.mjs";
 import { demoPerson } from "../support/demo-copy";
 import { signIn } from "../support/sign-in";
 import { startTestServer } from "../support/test-server";
@@ -74,70 +71,56 @@ function bareInserts(): Outcome {
   };
 }
 
-async function bareRoute(): Promise<Outcome> {
-  const app = path.join(root, "tests/bench/bare-app");
-  const next = path.join(root, "node_modules/next/dist/bin/next");
-  const built = spawnSync(process.execPath, [next, "build", app], {
-    cwd: root,
-    stdio: "ignore",
-    env: { ...process.env, NODE_ENV: "production" },
-  });
-  if (built.status !== 0) throw new Error("the bare application could not be built");
-  const port = await freePort();
-  const child = spawnServer({ port, host: "127.0.0.1", stdio: "ignore", env: process.env, folder: app });
-  try {
-    await waitUntilReady(child, `http://127.0.0.1:${port}/bare`);
-    const body = JSON.stringify({ readings: [{ typedText: "13.4" }] });
-    return await load("bare route handler", async () => {
-      const answer = await fetch(`http://127.0.0.1:${port}/bare`, {
-        method: "POST",
-        body,
-        headers: { "content-type": "application/json" },
-      });
-      await answer.json();
-      return answer.ok;
-    });
-  } finally {
-    await stopServer(child);
-  }
-}
-
 type Watch = { pointId: number; parameter: { id: number; code: string } };
 
-async function submitted(): Promise<Outcome> {
+type Served = { url: string; headers: Record<string, string> };
+
+/** The lightest route of the same server: who asks is looked up, nothing is written. */
+async function askedWho({ url, headers }: Served): Promise<Outcome> {
+  return load("a route handler that writes nothing (who am I)", async () => {
+    const answer = await fetch(`${url}/api/v1/session`, { headers });
+    await answer.json();
+    return answer.ok;
+  });
+}
+
+async function submitted({ url, headers }: Served): Promise<Outcome> {
+  const answer = await fetch(`${url}/api/v1/watch`, { headers });
+  const { data } = (await answer.json()) as { data: Watch[] };
+  const rows = data.filter((row) => row.parameter.code === "temperature");
+  return load("a reading submitted (sign-in checked, judged, sealed, durable)", async (person, turn) => {
+    const row = rows[(person + turn) % rows.length];
+    const uuid = randomUUID();
+    const reading = {
+      uuid,
+      pointId: row?.pointId,
+      parameterId: row?.parameter.id,
+      typedText: "13.4",
+      takenAt: Date.now(),
+    };
+    const sent = await fetch(`${url}/api/v1/readings`, {
+      method: "POST",
+      headers: { ...headers, "idempotency-key": uuid },
+      body: JSON.stringify({ readings: [reading] }),
+    });
+    await sent.json();
+    return sent.ok;
+  });
+}
+
+async function served(): Promise<Outcome[]> {
   const server = await startTestServer("bench");
   try {
     const jar = await signIn(server.url, demoPerson("operator"));
     const headers = { cookie: jar.header(), "content-type": "application/json", origin: server.url };
-    const answer = await fetch(`${server.url}/api/v1/watch`, { headers });
-    const { data } = (await answer.json()) as { data: Watch[] };
-    const rows = data.filter((row) => row.parameter.code === "temperature");
-    return await load(
-      "a reading submitted (sign-in checked, judged, sealed, durable)",
-      async (person, turn) => {
-        const row = rows[(person + turn) % rows.length];
-        const reading = {
-          uuid: randomUUID(),
-          pointId: row?.pointId,
-          parameterId: row?.parameter.id,
-          typedText: "13.4",
-          takenAt: Date.now(),
-        };
-        const sent = await fetch(`${server.url}/api/v1/readings`, {
-          method: "POST",
-          headers: { ...headers, "idempotency-key": reading.uuid },
-          body: JSON.stringify({ readings: [reading] }),
-        });
-        await sent.json();
-        return sent.ok;
-      },
-    );
+    const to = { url: server.url, headers };
+    return [await askedWho(to), await submitted(to)];
   } finally {
     await server.stop();
   }
 }
 
-const outcomes = [bareInserts(), await bareRoute(), await submitted()];
+const outcomes = [bareInserts(), ...(await served())];
 const product = outcomes[2];
 for (const each of outcomes) {
   const ratio = product ? each.perSecond / product.perSecond : Number.NaN;
