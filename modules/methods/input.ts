@@ -1,4 +1,5 @@
 import { z } from "zod";
+import { wholeNumber } from "@/lib/whole-number";
 import {
   ANSWER_MEANINGS,
   CHECK_VERDICTS,
@@ -7,15 +8,6 @@ import {
   PARAMETER_KINDS,
 } from "./model";
 import { definitionFaults } from "./rules/definition-faults";
-
-/** A whole number, as such or as a form or an address carries it; an empty text is not 0. */
-const whole = (min: number, max: number, message: string) =>
-  z.union([z.number(), z.string().trim()], message).transform((given, context) => {
-    const value = typeof given === "number" ? given : /^-?\d+$/.test(given) ? Number(given) : Number.NaN;
-    if (Number.isSafeInteger(value) && value >= min && value <= max) return value;
-    context.addIssue({ code: "custom", message });
-    return z.NEVER;
-  });
 
 /** A number or nothing, as such or as typed: comma or point, any minus sign; an empty text is nothing. */
 const decimalOrNothing = z
@@ -33,7 +25,7 @@ const decimalOrNothing = z
     return z.NEVER;
   });
 
-const id = whole(1, Number.MAX_SAFE_INTEGER, "Choose one from the list.");
+const id = wholeNumber(1, Number.MAX_SAFE_INTEGER, "Choose one from the list.");
 const idOrNothing = z.union([z.literal("").transform(() => null), z.null(), id]).default(null);
 const name = z.string().trim().min(1, "Write a name.").max(80, "Keep the name under 80 characters.");
 const note = z.string().trim().max(1000, "Keep the note under 1,000 characters.").default("");
@@ -78,7 +70,7 @@ const choice = z.strictObject({
 const changeable = {
   name,
   acceptedUnits: z.array(z.string().max(40)).max(40).default([]),
-  decimals: whole(0, 6, "Decimals are a whole number from 0 to 6."),
+  decimals: wholeNumber(0, 6, "Decimals are a whole number from 0 to 6."),
   plausible: z
     .strictObject({ low: decimalOrNothing, high: decimalOrNothing })
     .default({ low: null, high: null }),
@@ -142,7 +134,7 @@ const instrumentFields = {
     .union([
       z.literal("").transform(() => null),
       z.null(),
-      whole(1, 3660, "Days between checks are a whole number from 1 to 3660; leave it empty for none."),
+      wholeNumber(1, 3660, "Days between checks are a whole number from 1 to 3660; leave it empty for none."),
     ])
     .default(null),
 };

@@ -1,4 +1,5 @@
 import { z } from "zod";
+import { wholeNumber } from "@/lib/whole-number";
 import {
   EQUIPMENT_KINDS,
   LENGTH_UNITS,
@@ -12,15 +13,7 @@ import {
 import { componentProblems, readDecimal } from "./rules/typed-component";
 import { SHAPE_TABLE } from "./shapes.data";
 
-/** A whole number, as such or as a form or an address carries it; an empty text is not 0. */
-const whole = (min: number, max: number, message: string) =>
-  z.union([z.number(), z.string().trim()], message).transform((given, context) => {
-    const value = typeof given === "number" ? given : /^-?\d+$/.test(given) ? Number(given) : Number.NaN;
-    if (Number.isSafeInteger(value) && value >= min && value <= max) return value;
-    context.addIssue({ code: "custom", message });
-    return z.NEVER;
-  });
-const id = whole(1, Number.MAX_SAFE_INTEGER, "Choose one from the list.");
+const id = wholeNumber(1, Number.MAX_SAFE_INTEGER, "Choose one from the list.");
 const code = z
   .string("Give a code, such as KELP-01.")
   .trim()
@@ -31,7 +24,7 @@ const name = z
   .trim()
   .min(1, "Write a name.")
   .max(80, "Keep the name under 80 characters.");
-const order = whole(0, 9999, "The walking order is a whole number from 0 to 9999.");
+const order = wholeNumber(0, 9999, "The walking order is a whole number from 0 to 9999.");
 const notes = z.string().trim().max(2000, "Keep notes under 2,000 characters.").default("");
 const reason = z
   .string("Say why, in a few words.")
@@ -48,7 +41,7 @@ export const createSiteInput = z.strictObject({ code, name });
 const areaFields = {
   code,
   name,
-  biosecurityLevel: whole(0, 4, "The biosecurity level is a whole number from 0 to 4."),
+  biosecurityLevel: wholeNumber(0, 4, "The biosecurity level is a whole number from 0 to 4."),
   walkingOrder: order,
 };
 /** What a form asks about an area, a system, a point, equipment; new and existing alike. */
@@ -230,6 +223,6 @@ export const listPointsInput = z.strictObject({
 export const listEquipmentInput = z.strictObject({ systemId: id.optional() });
 export const volumeOfInput = z.strictObject({
   code,
-  at: whole(0, 8.64e15, "Give the moment in milliseconds since 1970.").optional(),
+  at: wholeNumber(0, 8.64e15, "Give the moment in milliseconds since 1970.").optional(),
 });
 export const listWaitingVolumesInput = z.strictObject({});
